@@ -1,5 +1,15 @@
 import * as z from 'zod';
-import { idSchema, instantSchema, noteSchema, pageOf, pageQuery, personRefSchema, requiredText, shortText, versionSchema } from './common';
+import {
+  idSchema,
+  instantSchema,
+  noteSchema,
+  pageOf,
+  pageQuery,
+  personRefSchema,
+  requiredText,
+  shortText,
+  versionSchema,
+} from './common';
 
 export const areaInputSchema = z.strictObject({
   /** The room's code on the door, unique on the site: B-204. */

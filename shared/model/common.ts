@@ -1,9 +1,13 @@
 import * as z from 'zod';
 
 /** A record's identity: opaque, never reused. */
-export const idSchema = z.string().min(1).max(64).regex(/^[A-Za-z0-9_-]+$/, {
-  error: 'An id has letters, digits, - and _ only.',
-});
+export const idSchema = z
+  .string()
+  .min(1)
+  .max(64)
+  .regex(/^[A-Za-z0-9_-]+$/, {
+    error: 'An id has letters, digits, - and _ only.',
+  });
 
 /** A UTC instant as text, to the millisecond: 2026-12-01T09:30:00.000Z. */
 export const instantSchema = z.iso.datetime({ precision: 3 });
@@ -15,7 +19,10 @@ export const localDateSchema = z.iso.date({
 
 /** One line of text a person typed, trimmed. */
 export function shortText(max = 120) {
-  return z.string().trim().max(max, { error: `At most ${max} characters.` });
+  return z
+    .string()
+    .trim()
+    .max(max, { error: `At most ${max} characters.` });
 }
 
 /** One line of text that must not be empty. */
@@ -24,10 +31,7 @@ export function requiredText(what: string, max = 120) {
 }
 
 /** Longer text: a reason, a note. */
-export const noteSchema = z
-  .string()
-  .trim()
-  .max(4000, { error: 'At most 4,000 characters.' });
+export const noteSchema = z.string().trim().max(4000, { error: 'At most 4,000 characters.' });
 
 /** A reason that will be read years later. */
 export const reasonSchema = noteSchema.min(10, {

@@ -1,7 +1,14 @@
 import * as z from 'zod';
 import { idSchema, instantSchema, personRefSchema, shortText } from './common';
 
-export const LASER_FILE_KINDS = ['data-sheet', 'photo', 'label-photo', 'manual', 'declaration', 'measurement-report'] as const;
+export const LASER_FILE_KINDS = [
+  'data-sheet',
+  'photo',
+  'label-photo',
+  'manual',
+  'declaration',
+  'measurement-report',
+] as const;
 export const laserFileKindSchema = z.enum(LASER_FILE_KINDS);
 
 /** Fields beside the file in the multipart upload. */

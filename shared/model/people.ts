@@ -1,5 +1,13 @@
 import * as z from 'zod';
-import { idSchema, instantSchema, pageOf, pageQuery, requiredText, shortText, versionSchema } from './common';
+import {
+  idSchema,
+  instantSchema,
+  pageOf,
+  pageQuery,
+  requiredText,
+  shortText,
+  versionSchema,
+} from './common';
 
 export const ROLES = [
   'administrator',
@@ -35,7 +43,9 @@ export const ROLE_WORDS: Readonly<Record<Role, string>> = {
 
 export const personInputSchema = z.strictObject({
   name: requiredText('the name'),
-  email: z.email({ error: 'Enter an e-mail address, for example name@institute.example.' }).max(254),
+  email: z
+    .email({ error: 'Enter an e-mail address, for example name@institute.example.' })
+    .max(254),
   department: shortText(60).optional(),
   roles: z.array(roleSchema).max(ROLES.length),
   active: z.boolean(),

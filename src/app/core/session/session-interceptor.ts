@@ -1,0 +1,32 @@
+import { type HttpInterceptorFn, HttpXsrfTokenExtractor } from '@angular/common/http';
+import { inject } from '@angular/core';
+import { catchError, switchMap, throwError } from 'rxjs';
+
+import { ProblemError } from '../http/problem-error';
+import { ASKS_FOR_SESSION } from './session-api';
+import { SessionRenewal } from './session-renewal';
+
+/** When the session has ended, asks for the password over the page and then sends again. */
+export const sessionInterceptor: HttpInterceptorFn = (request, next) => {
+  if (request.context.get(ASKS_FOR_SESSION)) return next(request);
+  const renewal = inject(SessionRenewal);
+  const tokens = inject(HttpXsrfTokenExtractor);
+  return next(request).pipe(
+    catchError((error: unknown) => {
+      if (!(error instanceof ProblemError && error.is('not-signed-in'))) {
+        return throwError(() => error);
+      }
+      return renewal.renew().pipe(
+        switchMap(() => {
+          // Signing in again changes the token that the first try carried.
+          const token = tokens.getToken();
+          const again =
+            token && request.headers.has('X-XSRF-TOKEN')
+              ? request.clone({ setHeaders: { 'X-XSRF-TOKEN': token } })
+              : request;
+          return next(again);
+        }),
+      );
+    }),
+  );
+};

@@ -36,7 +36,10 @@ function installDebianPackages() {
   console.log(`Installing ${DEBIAN_PACKAGES.join(', ')} …`);
   const env = { ...process.env, DEBIAN_FRONTEND: 'noninteractive' };
   const sudo = process.getuid?.() === 0 ? [] : ['sudo'];
-  for (const args of [['update', '-qq'], ['install', '-y', '-qq', ...DEBIAN_PACKAGES]]) {
+  for (const args of [
+    ['update', '-qq'],
+    ['install', '-y', '-qq', ...DEBIAN_PACKAGES],
+  ]) {
     const [command, ...rest] = [...sudo, 'apt-get', ...args];
     spawnSync(command, rest, { stdio: ['ignore', 'ignore', 'inherit'], env });
   }
@@ -62,7 +65,12 @@ function suite(name, args) {
     count(`${name} (no report)`, 0, 1);
     return 0;
   }
-  const { numPassedTests, numTotalTests, numPendingTests = 0, success } = JSON.parse(readFileSync(report, 'utf8'));
+  const {
+    numPassedTests,
+    numTotalTests,
+    numPendingTests = 0,
+    success,
+  } = JSON.parse(readFileSync(report, 'utf8'));
   const failed = numTotalTests - numPassedTests;
   // A suite that fails before its tests, or skips any, is a failure too.
   const broken = (status !== 0 || !success || numTotalTests === 0) && failed === 0 ? 1 : 0;

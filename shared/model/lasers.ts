@@ -179,6 +179,16 @@ export const laserInputSchema = z
     certificateExpiresOn: localDateSchema.optional(),
     notices: noteSchema.optional(),
 
+    /** Asked for by one person, cleared by another; the server keeps who asked. */
+    disposal: z
+      .strictObject({
+        method: shortText(200),
+        disabled: z.boolean(),
+        cordRemoved: z.boolean(),
+        hazardousPartsRemoved: z.boolean(),
+      })
+      .optional(),
+
     orderNumber: shortText(60).optional(),
     supplier: shortText(120).optional(),
     receivedOn: localDateSchema.optional(),

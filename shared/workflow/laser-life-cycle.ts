@@ -24,6 +24,7 @@ export const LASER_STATES = [
 export type LaserState = (typeof LASER_STATES)[number];
 
 export const LASER_EVENTS = [
+  'register',
   'request-purchase',
   'declare-found',
   'take-over',
@@ -126,7 +127,10 @@ export type LaserGuard =
   | 'written-disposition'
   | 'made-harmless';
 
-/** Guards whose records come with later parts of the product, and the words for what is missing. */
+/**
+ * Guards whose records come with later parts of the product, and the words for what is missing. A
+ * running waiver of the laser that names these very words meets them, and nothing else does.
+ */
 export const NOT_RECORDED_GUARDS: Readonly<Partial<Record<LaserGuard, string>>> = {
   'registered-with-authority': 'Registration with the authority is not recorded here.',
   'controls-ticked': 'The installed controls are not recorded here.',
@@ -149,8 +153,9 @@ export type LaserEffect =
   | 'released'
   | 'blocked'
   | 'unblock'
-  | 'begin-draft'
-  | 'ask-new-place'
+  | 'move-place'
+  | 'note-receiver'
+  | 'forget-receiver'
   | 'old-approval-void';
 
 /** Job specification 6.1. */
@@ -160,6 +165,7 @@ export const LASER_LIFE_CYCLE: Machine<LaserState, LaserEvent, LaserGuard, Laser
   terminal: ['rejected', 'withdrawn', 'transferred', 'disposed'],
   // prettier-ignore
   transitions: [
+    { from: ['start'], event: 'register', label: 'Register a laser that is here', actors: ['supervisor', 'lso', 'deputy-lso'], guards: [], to: 'received', effects: [] },
     { from: ['start'], event: 'request-purchase', label: 'Request a purchase', actors: ['supervisor'], guards: ['class-and-room-named'], to: 'requested', effects: [] },
     { from: ['start'], event: 'declare-found', label: 'Declare a laser found, given, brought or home-built', actors: ['anyone'], guards: ['photo-or-description'], to: 'received', effects: ['quarantine'] },
     { from: ['start', 'received', 'registered', 'under-evaluation', 'evaluated', 'commissioning'], event: 'take-over', label: 'Take over from a former register', actors: ['lso'], guards: ['reason-given', 'dated-waiver'], to: 'in-use', effects: ['under-waiver', 'released'], asks: ['reason', 'waiver'] },
@@ -188,13 +194,13 @@ export const LASER_LIFE_CYCLE: Machine<LaserState, LaserEvent, LaserGuard, Laser
     { from: ['blocked'], event: 're-evaluate', label: 'Evaluate again', actors: ['lso'], guards: ['never-released-or-needed'], to: 'under-evaluation', effects: ['unblock'], asks: ['reason'] },
     { from: ['registered', 'evaluated', 'commissioning', 'in-use', 'blocked'], event: 'store', label: 'Store', actors: ['supervisor'], guards: ['key-and-cord-out'], to: 'stored', effects: [], asks: ['reason'] },
     { from: ['stored'], event: 'take-out', label: 'Take out of store', actors: ['supervisor'], guards: ['evaluation-current'], to: 'commissioning', effects: [] },
-    { from: ['stored'], event: 'take-out-unevaluated', label: 'Take out for a new evaluation', actors: ['supervisor'], guards: ['no-current-evaluation-or-other-room'], to: 'under-evaluation', effects: [], asks: ['area'] },
+    { from: ['stored'], event: 'take-out-unevaluated', label: 'Take out for a new evaluation', actors: ['supervisor'], guards: ['no-current-evaluation-or-other-room'], to: 'under-evaluation', effects: ['move-place'], asks: ['area'] },
     { from: ['in-use', 'stored'], event: 'lend', label: 'Lend', actors: ['supervisor'], guards: ['loan-form'], to: 'on-loan', effects: [] },
     { from: ['on-loan'], event: 'loan-returned', label: 'Returned from loan', actors: ['supervisor'], guards: ['reason-given'], to: 'stored', effects: [], asks: ['reason'] },
-    { from: ['received', 'in-use', 'stored', 'blocked', 'on-loan'], event: 'transfer', label: 'Transfer', actors: ['supervisor'], guards: ['both-supervisors'], to: 'transferring', effects: [], asks: ['area', 'reason'] },
+    { from: ['received', 'in-use', 'stored', 'blocked', 'on-loan'], event: 'transfer', label: 'Transfer', actors: ['supervisor'], guards: ['both-supervisors'], to: 'transferring', effects: ['note-receiver'], asks: ['area', 'reason'] },
     { from: ['transferring'], event: 'accept-in-house', label: 'Accept in house', actors: ['supervisor', 'lso'], guards: ['new-owner-accepts'], to: 'registered', effects: ['old-approval-void'] },
     { from: ['transferring'], event: 'left-site', label: 'Left the site', actors: ['lso'], guards: ['written-disposition'], to: 'transferred', effects: [], asks: ['reason'] },
-    { from: ['transferring'], event: 'decline', label: 'Decline the transfer', actors: ['supervisor', 'lso'], guards: ['reason-given'], to: 'stored', effects: [], asks: ['reason'] },
+    { from: ['transferring'], event: 'decline', label: 'Decline the transfer', actors: ['supervisor', 'lso'], guards: ['reason-given'], to: 'stored', effects: ['forget-receiver'], asks: ['reason'] },
     { from: ['received', 'registered', 'stored', 'blocked', 'in-use'], event: 'clear-disposal', label: 'Clear for disposal', actors: ['lso'], guards: ['other-person-asked', 'made-harmless'], to: 'disposed', effects: [], asks: ['reason'] },
   ],
 };

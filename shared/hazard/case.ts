@@ -36,10 +36,7 @@ export interface BurstEmission {
 
 /** How the light is emitted in time. */
 export type Emission =
-  | ContinuousEmission
-  | SinglePulseEmission
-  | RepetitiveEmission
-  | BurstEmission;
+  ContinuousEmission | SinglePulseEmission | RepetitiveEmission | BurstEmission;
 
 /** The point of a Gaussian at which diameters and divergences are given. */
 export type WidthCriterion = '1/e' | '1/e2';
@@ -112,12 +109,7 @@ export interface DiffusePath {
 }
 
 /** The way from the laser to the person. */
-export type Path =
-  | DirectPath
-  | LensPath
-  | MultimodeFiberPath
-  | SingleModeFiberPath
-  | DiffusePath;
+export type Path = DirectPath | LensPath | MultimodeFiberPath | SingleModeFiberPath | DiffusePath;
 
 /** Binoculars, a telescope or a loupe in front of the eye. */
 export interface OpticalAid {

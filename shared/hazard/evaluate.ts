@@ -1,4 +1,12 @@
+import type { HazardCase } from './case';
+import { cautionsOf } from './cautions';
+import { ENGINE_VERSION } from './engine-version';
+import { parseCase } from './parse-case';
+import { sideResult } from './side-result';
 import type { EvaluationErrors, EvaluationResult } from './result';
+import { sceneOf } from './scene';
+import { sideHazard } from './side-hazard';
+import { warningsOf } from './warnings';
 
 /** What can be switched off for speed. */
 export interface EvaluateOptions {
@@ -8,8 +16,52 @@ export interface EvaluateOptions {
 
 /**
  * Evaluates one case. Never throws: what is wrong with the case comes back as field errors.
+ *
+ * @example evaluate({ ruleSet: 'ansi-z136.1-2014', … }) // { eye: { hazardDistanceM: 1414.4, … }, … }
  */
-export declare function evaluate(
+export function evaluate(
   input: unknown,
-  options?: EvaluateOptions,
-): EvaluationResult | EvaluationErrors;
+  { bare = false }: EvaluateOptions = {},
+): EvaluationResult | EvaluationErrors {
+  const parsed = parseCase(input);
+  if (!parsed.ok) {
+    const { id, errors } = parsed;
+    return id === undefined ? { errors } : { id, errors };
+  }
+  try {
+    return evaluateCase(parsed.case, bare);
+  } catch (error) {
+    // Why: numbers such as 1e-300 are valid each, but lead beyond what can be computed with.
+    if (error instanceof RangeError) return outOfRange(parsed.case.id);
+    throw error;
+  }
+}
+
+function evaluateCase(hazardCase: HazardCase, bare: boolean): EvaluationResult {
+  const scene = sceneOf(hazardCase);
+  const { ruleSet } = scene.rules;
+  const eye = sideHazard(scene, 'eye');
+  const skin = sideHazard(scene, 'skin');
+  const result: EvaluationResult = {
+    ruleSet: hazardCase.ruleSet,
+    edition: ruleSet.edition,
+    engineVersion: ENGINE_VERSION,
+    eye: sideResult(scene, eye, bare),
+    skin: sideResult(scene, skin, bare),
+    distances: { hazardDistanceM: { eye: eye.hazardDistanceM, skin: skin.hazardDistanceM } },
+    warnings: warningsOf(scene, eye, skin),
+    cautions: cautionsOf(ruleSet),
+  };
+  return hazardCase.id === undefined ? result : { id: hazardCase.id, ...result };
+}
+
+function outOfRange(id: string | undefined): EvaluationErrors {
+  const errors = [
+    {
+      path: '',
+      message: 'The numbers of this case lie too far apart to be computed with.',
+      allowed: 'powers, sizes and times that a laser can have',
+    },
+  ];
+  return id === undefined ? { errors } : { id, errors };
+}

@@ -28,9 +28,13 @@ export const SOURCES = {
     cite: 'Directive 2006/25/EC, Annex II, Table 2.6 (repetitive exposure), consolidated text 26.7.2019',
   },
   'iec-60825-1-2014:A.1': { cite: 'IEC 60825-1:2014, Table A.1 (MPE of the eye, C6 = 1)' },
-  'iec-60825-1-2014:A.2': { cite: 'IEC 60825-1:2014, Table A.2 (MPE of the eye, extended sources)' },
+  'iec-60825-1-2014:A.2': {
+    cite: 'IEC 60825-1:2014, Table A.2 (MPE of the eye, extended sources)',
+  },
   'iec-60825-1-2014:A.3': { cite: 'IEC 60825-1:2014, Table A.3 (MPE of the skin)' },
-  'iec-60825-1-2014:factors': { cite: 'IEC 60825-1:2014, Table 9 (correction factors and break times)' },
+  'iec-60825-1-2014:factors': {
+    cite: 'IEC 60825-1:2014, Table 9 (correction factors and break times)',
+  },
   'iec-60825-1-2014:pulses': { cite: 'IEC 60825-1:2014, clause 4.3 f) (repetitive pulses)' },
   'iec-60825-1-2014:apertures': { cite: 'IEC 60825-1:2014, Annex A, aperture diameters for MPE' },
   'ansi-z136.1-2014:5': { cite: 'ANSI Z136.1-2014, Table 5 (MPE of the eye)' },
@@ -53,8 +57,12 @@ export const SOURCES = {
   'bgi-832:4': { cite: 'BGI 832, Table 4 (reproduces DIN EN 60825-1)' },
   'bgi-832:6a': { cite: 'BGI 832, Table 6a, p. 29 (reproduces DIN EN 60825-1)' },
   'bgi-832:p27': { cite: 'BGI 832, p. 27 (angle of acceptance; reproduces DIN EN 60825-1)' },
-  'bgv-b2-da:5': { cite: 'BGV B2, Durchführungsanweisungen, Table 5 (apertures of DIN EN 60825-1)' },
-  'jis-c-6802-2014:errata': { cite: 'JIS C 6802:2014 (identical with IEC 60825-1:2014), public errata' },
+  'bgv-b2-da:5': {
+    cite: 'BGV B2, Durchführungsanweisungen, Table 5 (apertures of DIN EN 60825-1)',
+  },
+  'jis-c-6802-2014:errata': {
+    cite: 'JIS C 6802:2014 (identical with IEC 60825-1:2014), public errata',
+  },
   'no-2011:4.5': {
     cite: 'Norwegian regulation on action and limit values, Annex 4, Table 4.5 (transposes 2006/25/EC Table 2.5)',
   },

@@ -1,11 +1,6 @@
-/** Rule sets by id, current editions first. Superseded ones are for reading and re-checking old evaluations. */
-export const RULE_SET_IDS = [
-  'icnirp-2013',
-  'eu-2006-25',
-  'iec-60825-1-2014',
-  'ansi-z136.1-2014',
-  'ansi-z136.1-2007',
-  'ansi-z136.1-1993',
-] as const;
+import { RULE_SETS, type RuleSetId } from './index';
 
-export type RuleSetId = (typeof RULE_SET_IDS)[number];
+/** The ids of the one list, in its order: current editions first. */
+export const RULE_SET_IDS: readonly RuleSetId[] = RULE_SETS.map((ruleSet) => ruleSet.id);
+
+export type { RuleSetId };

@@ -1,0 +1,45 @@
+import { breakTimeT2 } from './factors/break-time-t2';
+import { correctionFactorCE } from './factors/correction-factor-ce';
+import { factorRowAt, factorValue } from './factors/factor-value';
+import { alphaMax, coneFactor, edgeS, gammaPh, tabulatedDuration } from './limits/row-reading';
+import type { LimitCandidate, LimitSituation } from './pulses/limit-candidates';
+import type { Factors } from './result';
+import type { RuleSet } from './rule-sets';
+
+/** The numbers that a limit was read with; only those that were used. */
+export function factorsOf(
+  { factors: table, pulseTrain }: RuleSet,
+  { point }: LimitSituation,
+  { row, durationS, rule, sharedBy, train }: LimitCandidate,
+): Factors {
+  const used: Factors = {};
+  const tabulatedS = tabulatedDuration(point, durationS);
+  for (const symbol of row.printed.factors ?? []) {
+    if (symbol === 'CE') {
+      used.alphaMaxMrad = alphaMax(point, tabulatedS);
+      used.CE = correctionFactorCE(point.source, used.alphaMaxMrad);
+    } else if (symbol !== 'T2^-1/4') {
+      const factor = factorRowAt(table[symbol], point.wavelengthNm);
+      used[symbol] = factor === undefined ? 1 : factorValue(factor, point.wavelengthNm);
+    }
+  }
+  const isCounted = train !== undefined && pulseTrain.countedWithin === 'T2';
+  if (row.from === 'T2' || row.to === 'T2' || (isCounted && point.band.isRetinal)) {
+    used.T2S = breakTimeT2(point.source);
+  }
+  if (row.from === 'T1' || row.to === 'T1') used.T1S = edgeS('T1', point);
+  if (
+    row.mechanism === 'photochemical' &&
+    point.band.isRetinal &&
+    coneFactor(point, tabulatedS) > 1
+  ) {
+    used.gammaPhMrad = gammaPh(point, tabulatedS);
+  }
+  if (rule === 'average') used.pulses = sharedBy;
+  if (train !== undefined) {
+    used.CP = train.factor;
+    used.pulses = train.pulses;
+    if (sharedBy > 1) used.pulsesInGroup = sharedBy;
+  }
+  return used;
+}

@@ -1,0 +1,158 @@
+import type { Emission } from '../case';
+import { plainMean } from '../factors/apparent-source';
+import { breakTimeT2 } from '../factors/break-time-t2';
+import { factorValue } from '../factors/factor-value';
+import { pulseTrainFactor, pulseTrainRow } from '../factors/pulse-train-factor';
+import { limitingApertureMm } from '../limit';
+import type { CompiledRow } from '../limits/compiled-rule-set';
+import {
+  alphaMax,
+  appliesAt,
+  radiantExposureLimit,
+  rowsFor,
+  tabulatedDuration,
+  type ReadingPoint,
+} from '../limits/row-reading';
+import type { LimitRule } from '../result';
+import type { PulseTrainRow } from '../rule-sets/limit-table';
+import type { PulseTrainRule } from '../rule-sets/rule-set';
+import { burstDuration } from './emission-timing';
+import { pulseGroup, pulsesWithin, type PulsedEmission } from './pulse-groups';
+
+/** One limit that the emission has to keep, in the terms of one exposure or one pulse. */
+export interface LimitCandidate {
+  readonly rule: LimitRule;
+  readonly row: CompiledRow;
+  /** The duration that the row is read at, s. */
+  readonly durationS: number;
+  /** The row at that duration, J/m². */
+  readonly rowLimit: number;
+  /** What the candidate allows: CW over the exposure, pulsed per pulse, J/m². */
+  readonly limit: number;
+  readonly apertureM: number;
+  /** Pulses that share the row's limit: N of the average rule, n_g of a group. */
+  readonly sharedBy: number;
+  readonly train: TrainReading | undefined;
+}
+
+/** How the pulse-train rule was read. */
+export interface TrainReading {
+  /** C_P. */
+  readonly factor: number;
+  /** N, groups counted as one. */
+  readonly pulses: number;
+  readonly branch: PulseTrainRow | undefined;
+}
+
+/** What decides the limits of one beam on one side. */
+export interface LimitSituation {
+  readonly point: ReadingPoint;
+  readonly emission: Emission;
+  readonly exposureS: number;
+  readonly trainRule: PulseTrainRule;
+  readonly hasT2: boolean;
+}
+
+/** Every limit that the emission has to keep; the order decides between equals. */
+export function limitCandidates(situation: LimitSituation): LimitCandidate[] {
+  const { emission, exposureS } = situation;
+  const candidates: LimitCandidate[] = [];
+  if (emission.mode === 'cw') {
+    addRows(candidates, situation, 'continuous', exposureS, 1);
+    return candidates;
+  }
+  addRows(candidates, situation, 'single-pulse', emission.pulseDurationS, 1);
+  if (emission.mode === 'single') return candidates;
+  addRows(candidates, situation, 'average', exposureS, pulsesWithin(emission, exposureS));
+  if (emission.mode === 'burst') {
+    addRows(candidates, situation, 'average', burstDuration(emission), emission.pulsesPerBurst);
+  }
+  addTrain(candidates, situation, emission);
+  return candidates;
+}
+
+function addRows(
+  candidates: LimitCandidate[],
+  { point }: LimitSituation,
+  rule: LimitRule,
+  durationS: number,
+  sharedBy: number,
+): void {
+  const tabulatedS = tabulatedDuration(point, durationS);
+  for (const row of rowsFor(point)) {
+    if (!appliesAt(row, point, tabulatedS)) continue;
+    const rowLimit = radiantExposureLimit(row, point, durationS);
+    const apertureM = limitingApertureMm(row, point, durationS) * 1e-3;
+    const limit = rowLimit / sharedBy;
+    candidates.push({
+      rule,
+      row,
+      durationS,
+      rowLimit,
+      limit,
+      apertureM,
+      sharedBy,
+      train: undefined,
+    });
+  }
+}
+
+/** The pulse-train rule: thermal limits only, each pulse or group of pulses times C_P. */
+function addTrain(
+  candidates: LimitCandidate[],
+  situation: LimitSituation,
+  emission: PulsedEmission,
+): void {
+  const { point, exposureS } = situation;
+  const { ti, pulseTrain } = point.band;
+  const tiS = ti === undefined ? 0 : factorValue(ti, point.wavelengthNm);
+  const group = pulseGroup(emission, Math.min(tiS, exposureS));
+  if (group.pulses === 1 && pulseTrain.length === 0) return;
+  const pulses = Math.max(1, pulsesCounted(situation, emission) / group.pulses);
+  const train = trainReading(situation, group.durationS, group.durationS <= tiS, pulses);
+  const tabulatedS = tabulatedDuration(point, group.durationS);
+  for (const row of rowsFor(point)) {
+    if (row.mechanism === 'photochemical' || row.isAnteriorCap) continue;
+    if (!appliesAt(row, point, tabulatedS)) continue;
+    const rowLimit = radiantExposureLimit(row, point, group.durationS);
+    candidates.push({
+      rule: 'pulse-train',
+      row,
+      durationS: group.durationS,
+      rowLimit,
+      limit: (rowLimit * train.factor) / group.pulses,
+      apertureM: limitingApertureMm(row, point, group.durationS) * 1e-3,
+      sharedBy: group.pulses,
+      train,
+    });
+  }
+}
+
+/** N within the exposure, or within T_2 when the edition says so and it is shorter. */
+function pulsesCounted(situation: LimitSituation, emission: PulsedEmission): number {
+  return pulsesWithin(emission, countingTime(situation));
+}
+
+/** The time within which the pulse-train rule counts, s. */
+export function countingTime({ point, exposureS, trainRule, hasT2 }: LimitSituation): number {
+  const isShortened = trainRule.countedWithin === 'T2' && hasT2 && point.band.isRetinal;
+  return isShortened ? Math.min(exposureS, breakTimeT2(point.source)) : exposureS;
+}
+
+function trainReading(
+  { point, exposureS }: LimitSituation,
+  pulseS: number,
+  upToTi: boolean,
+  pulses: number,
+): TrainReading {
+  const train = {
+    wavelengthNm: point.wavelengthNm,
+    pulseS,
+    upToTi,
+    exposureS,
+    sourceMrad: plainMean(point.source),
+    alphaMaxMrad: alphaMax(point, pulseS),
+  };
+  const branch = pulseTrainRow(point.band.pulseTrain, train, pulses);
+  return { factor: pulseTrainFactor(branch, pulses), pulses, branch };
+}

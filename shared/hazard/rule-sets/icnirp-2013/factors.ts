@@ -1,0 +1,78 @@
+import type { DurationRow, FactorRow, PulseTrainRow } from '../limit-table';
+import type { FactorTable } from '../rule-set';
+
+// Correction factors, break times and the pulse-train factor. Half-open bands.
+
+const MEMORY = { source: 'icnirp-2013:factors', confidence: 'memory-high' } as const;
+const SEEN_EQUIVALENT_CONE = {
+  source: 'icnirp-2013:factors',
+  confidence: 'seen-equivalent',
+  seenIn: 'bgi-832:p27',
+} as const;
+const MEMORY_MEDIUM = { source: 'icnirp-2013:factors', confidence: 'memory-medium' } as const;
+
+/** C_A, for less absorption by melanin in the near infrared. */
+// prettier-ignore
+const CA: readonly FactorRow[] = [
+  { wavelengthNm: [  180,  700], coefficient: 1, ...MEMORY },
+  { wavelengthNm: [  700, 1050], coefficient: 1, decadesPerNm: 0.002, originNm: 700, ...MEMORY },
+  { wavelengthNm: [ 1050, 1400], coefficient: 5, ...MEMORY },
+];
+
+/** C_B, for less photochemical effect at longer wavelengths. */
+// prettier-ignore
+const CB: readonly FactorRow[] = [
+  { wavelengthNm: [  400,  450], coefficient: 1, ...MEMORY },
+  { wavelengthNm: [  450,  600], coefficient: 1, decadesPerNm: 0.02, originNm: 450, ...MEMORY },
+];
+
+/** C_C, for absorption in front of the retina. */
+// prettier-ignore
+const CC: readonly FactorRow[] = [
+  { wavelengthNm: [  700, 1150], coefficient: 1, ...MEMORY },
+  { wavelengthNm: [ 1150, 1200], coefficient: 1, decadesPerNm: 0.018, originNm: 1150, ...MEMORY },
+  { wavelengthNm: [ 1200, 1400], plus: 8, coefficient: 1, decadesPerNm: 0.04, originNm: 1250, ...MEMORY },
+];
+
+/** T_i, within which pulses count as one, s. */
+// prettier-ignore
+const TI: readonly FactorRow[] = [
+  { wavelengthNm: [  400, 1050], coefficient: 5e-6, ...MEMORY },
+  { wavelengthNm: [ 1050, 1400], coefficient: 1.3e-5, ...MEMORY },
+  { wavelengthNm: [ 1400, 1500], coefficient: 1e-3, ...MEMORY },
+  { wavelengthNm: [ 1500, 1800], coefficient: 10, ...MEMORY },
+  { wavelengthNm: [ 1800, 2600], coefficient: 1e-3, ...MEMORY },
+  { wavelengthNm: [ 2600,  1e6], coefficient: 1e-7, ...MEMORY },
+];
+
+/** α_max, the largest angle that C_E grows with, mrad. */
+// prettier-ignore
+const ALPHA_MAX: readonly DurationRow[] = [
+  { wavelengthNm: [400, 1400], durationS: [  1e-13, 6.25e-4], coefficient: 5, ...MEMORY },
+  { wavelengthNm: [400, 1400], durationS: [6.25e-4,    0.25], coefficient: 200, timeExponent: 0.5, ...MEMORY },
+  { wavelengthNm: [400, 1400], durationS: [   0.25,     3e4], coefficient: 100, ...MEMORY },
+];
+
+/** γ_ph, the limiting cone of the photochemical limit, mrad. */
+// prettier-ignore
+const GAMMA_PH: readonly DurationRow[] = [
+  { wavelengthNm: [400, 600], durationS: [0.7, 100], coefficient: 11, ...SEEN_EQUIVALENT_CONE },
+  { wavelengthNm: [400, 600], durationS: [100, 1e4], coefficient: 1.1, timeExponent: 0.5, ...SEEN_EQUIVALENT_CONE },
+  { wavelengthNm: [400, 600], durationS: [1e4, 3e4], coefficient: 110, ...SEEN_EQUIVALENT_CONE },
+];
+
+/** C_P, the pulse-train factor. */
+// prettier-ignore
+const CP: readonly PulseTrainRow[] = [
+  { pulses: 'up to Ti',       wavelengthNm: [400, 1400], upToS: 0.25, exposureAboveS: 0.25, pulsesAbove: 600,      coefficient: 5, floor: 0.4, ...MEMORY_MEDIUM },
+  { pulses: 'longer than Ti', wavelengthNm: [400, 1400], upToS: 0.25, sourceMrad: [5, 'alphaMax'],                 coefficient: 1, floor: 0.4, ...MEMORY_MEDIUM },
+  { pulses: 'longer than Ti', wavelengthNm: [400, 1400], upToS: 0.25, sourceMrad: ['alphaMax', 100],               coefficient: 1, floor: 0.2, ...MEMORY_MEDIUM },
+];
+
+/** All factors of the edition. */
+// prettier-ignore
+export const FACTORS: FactorTable = {
+  symbols: { CA: 'C_A', CB: 'C_B', CC: 'C_C', CE: 'C_E', CP: 'C_P', KL: 'K_lambda', C2: 'C_2', T1: 'T_1', T2: 'T_2' },
+  CA, CB, CC, KL: [], C2: [], T1: [], Ti: TI,
+  alphaMax: ALPHA_MAX, gammaPh: GAMMA_PH, hasT2: true, CP,
+};

@@ -1,5 +1,7 @@
 import type { Routes } from '@angular/router';
 
-import { LaserListPage } from './laser-list-page';
+import { LaserListPage } from './list/laser-list-page';
 
-export const LASERS_ROUTES = [{ path: '', title: 'Lasers', component: LaserListPage }] satisfies Routes;
+export const LASERS_ROUTES = [
+  { path: '', title: 'Lasers', component: LaserListPage },
+] satisfies Routes;

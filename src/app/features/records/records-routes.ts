@@ -2,4 +2,6 @@ import type { Routes } from '@angular/router';
 
 import { RecordsPage } from './records-page';
 
-export const RECORDS_ROUTES = [{ path: '', title: 'Records', component: RecordsPage }] satisfies Routes;
+export const RECORDS_ROUTES = [
+  { path: '', title: 'Records', component: RecordsPage },
+] satisfies Routes;

@@ -1,0 +1,69 @@
+import {
+  ChangeDetectionStrategy,
+  Component,
+  computed,
+  effect,
+  inject,
+  input,
+  linkedSignal,
+} from '@angular/core';
+import { MatButton } from '@angular/material/button';
+import { ActivatedRoute, Router, RouterLink } from '@angular/router';
+import { scopeOf } from '@shared/permissions/permissions';
+
+import { KeysetList, PAGE_ROWS } from '../../../core/paging/keyset-list';
+import { CurrentSession } from '../../../core/session/current-session';
+import { Icon } from '../../../ui/icon/icon';
+import { ListTable } from '../../../ui/list-table/list-table';
+import { Quantity } from '../../../ui/quantity/quantity';
+import { SearchBox } from '../../../ui/search-box/search-box';
+import { TableState } from '../../../ui/table-state/table-state';
+import { AreasApi } from '../areas-api';
+
+/** The rooms with lasers in them. */
+@Component({
+  selector: 'lm-area-list-page',
+  imports: [Icon, ListTable, MatButton, Quantity, RouterLink, SearchBox, TableState],
+  templateUrl: './area-list-page.html',
+  styleUrl: './area-list-page.scss',
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class AreaListPage {
+  private readonly api = inject(AreasApi);
+  private readonly router = inject(Router);
+  private readonly route = inject(ActivatedRoute);
+  private readonly user = inject(CurrentSession).user;
+
+  readonly q = input<string>();
+  readonly rows = input<string>();
+
+  protected readonly search = linkedSignal(() => this.q() ?? '');
+  private readonly shown = linkedSignal(() => Number(this.rows()) || PAGE_ROWS);
+
+  protected readonly areas = new KeysetList({
+    name: 'areas',
+    query: computed(() => ({ q: this.search() })),
+    shown: this.shown,
+    load: (query, range) => this.api.list({ ...query, ...range }),
+  });
+  protected readonly mayCreate = computed(
+    () => scopeOf('area.create', this.user()?.roles ?? []) !== undefined,
+  );
+
+  constructor() {
+    // The address says what is shown; what is usual is left out.
+    effect(() => {
+      const rows = this.shown() > PAGE_ROWS ? this.shown() : null;
+      void this.router.navigate([], {
+        relativeTo: this.route,
+        queryParams: { q: this.search() || null, rows },
+        replaceUrl: true,
+      });
+    });
+  }
+
+  protected find(text: string): void {
+    this.search.set(text);
+    this.shown.set(PAGE_ROWS);
+  }
+}

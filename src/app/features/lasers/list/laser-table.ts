@@ -1,0 +1,58 @@
+import { ChangeDetectionStrategy, Component, computed, input, output } from '@angular/core';
+import { RouterLink } from '@angular/router';
+import type { LaserListQuery, LaserRow } from '@shared/model/lasers';
+import { figure } from '@shared/text/figure';
+
+import { LineSwatch } from '../../../ui/line-swatch/line-swatch';
+import { ListTable } from '../../../ui/list-table/list-table';
+import { SortHead, type Sorting } from '../../../ui/list-table/sort-head';
+import { Quantity } from '../../../ui/quantity/quantity';
+import { ReachAxis } from '../../../ui/reach-strip/reach-axis';
+import { ReachStrip } from '../../../ui/reach-strip/reach-strip';
+import { StateChip } from '../../../ui/state-chip/state-chip';
+import { reachDistances } from '../laser-reach';
+
+/** Lasers in rows, each with its reach under one axis. */
+@Component({
+  selector: 'lm-laser-table',
+  imports: [
+    LineSwatch,
+    ListTable,
+    Quantity,
+    ReachAxis,
+    ReachStrip,
+    RouterLink,
+    SortHead,
+    StateChip,
+  ],
+  templateUrl: './laser-table.html',
+  styleUrl: './laser-table.scss',
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class LaserTable {
+  readonly rows = input.required<readonly LaserRow[]>();
+  readonly sorting = input.required<Sorting<LaserListQuery['sort']>>();
+  readonly isBusy = input(false);
+
+  readonly sortingChange = output<Sorting<LaserListQuery['sort']>>();
+
+  protected readonly lasers = computed(() => this.rows().map(viewOf));
+}
+
+function viewOf(row: LaserRow) {
+  const { reach, attention } = row;
+  const summaries = [...new Set(row.lines.map((line) => line.summary))];
+  return {
+    ...row,
+    name: `${row.maker} ${row.model}`,
+    strip: reachDistances(reach, row.wallDistanceM),
+    isNowhere: reach?.eyeDistanceM === 0,
+    duration: reach ? `at ${figure(reach.eyeS, 's')}` : '',
+    summary: summaries.length > 2 ? `${summaries.length} emissions` : summaries.join('; '),
+    class: row.verifiedClass ?? row.declaredClass,
+    waits: attention[0],
+    more: attention.length > 1 ? `and ${attention.length - 1} more` : '',
+    allThatWaits: attention.join(' · '),
+    isStale: reach?.state === 'stale',
+  };
+}

@@ -24,6 +24,7 @@ function bracketed(node: MathNode | undefined): string {
 const READ: readonly (readonly [text: string, tree: string])[] = [
   ['18*C_A*t^0.75', '{{18*C[A]}*{t^0.75}}'],
   ['18*1*0.25^0.75', '{{18*1}*{0.25^0.75}}'],
+  ['0.02*C7*C5', '{{0.02*C[7]}*C[5]}'],
   ['a - b - c', '{{a-b}-c}'],
   ['a/b/c', '{{a/b}/c}'],
   ['a^b^c', '{a^{b^c}}'],

@@ -54,9 +54,9 @@ export function parseInfix(text: string): MathNode | undefined {
   return reader.isAtEnd ? node : undefined;
 }
 
-/** `alpha_max` as its printed parts: α with the index max. */
+/** `alpha_max` as its printed parts: α with the index max; `C4` as C with the index 4. */
 export function symbolParts(name: string): { base: string; sub?: string | undefined } {
-  const [base = '', ...rest] = name.split('_');
+  const [base = '', ...rest] = name.replace(/^([A-Za-z])(\d+)$/, '$1_$2').split('_');
   const sub = rest.map((part) => GREEK[part] ?? part).join(' ');
   return { base: GREEK[base] ?? base, sub: sub || undefined };
 }

@@ -8,7 +8,7 @@ import {
   transitionsFrom,
 } from '@shared/workflow/machine';
 
-import { recordChange } from '../audit-trail/record-change';
+import { type Change, recordChange } from '../audit-trail/record-change';
 import type { Context } from '../context/context';
 import { Conflict, GuardFailed, NotAllowed } from '../http/errors';
 
@@ -62,6 +62,8 @@ interface Step<Subject, Input> {
   readonly event: string;
   readonly input: Input;
   readonly bySystem?: boolean;
+  /** Fields that the step writes, for the audit entry. */
+  readonly changes?: readonly Change[];
 }
 
 type Row = Transition<string, string, string, string>;
@@ -94,6 +96,7 @@ export async function transition<Subject, Input extends StepInput>(
     recordName: name,
     fromState: state === 'start' ? null : state,
     toState: row.to,
+    changes: step.changes ?? [],
     reason: input.reason ?? input.comment ?? null,
     bySystem,
   });

@@ -1,6 +1,6 @@
 import type { Beam, HazardCase, Path } from '../hazard/case';
 import { evaluate } from '../hazard/evaluate';
-import type { EvaluationErrors, EvaluationResult } from '../hazard/result';
+import type { EvaluationResult } from '../hazard/result';
 import { ruleSetById, type RuleSetId } from '../hazard/rule-sets';
 import { figure } from '../text/figure';
 import { beamOf } from './emission-beam';
@@ -19,12 +19,17 @@ export type ScenarioCase =
     }
   | { readonly ok: false; readonly errors: readonly FieldError[] };
 
+/** Why a situation could not be evaluated. */
+export interface CaseErrors {
+  readonly errors: readonly FieldError[];
+}
+
 /** The engine's answer for one situation. */
 export interface ScenarioResult {
   readonly scenarioId: string;
   /** Null when the lines of the situation do not make a case. */
   readonly case: HazardCase | null;
-  readonly result: EvaluationResult | EvaluationErrors;
+  readonly result: EvaluationResult | CaseErrors;
   readonly conversions: readonly string[];
   readonly assumptions: readonly string[];
 }
@@ -56,7 +61,7 @@ export function scenarioCase(
       errors.push(unknownLine(id, inputs));
       continue;
     }
-    const line = beamOf(emission, scenario.atWavelengthNm[id], scenario.path);
+    const line = beamOf(emission, scenario.atWavelengthNm[id], scenario.path as Path);
     if (!line.ok) {
       errors.push(...line.errors.map((error) => ({ ...error, path: pathOf(error.path, id, index) })));
       continue;
@@ -97,7 +102,7 @@ export function evaluateScenarios(
 
 /** Whether the engine could evaluate the case. */
 export function isEvaluated(
-  result: EvaluationResult | EvaluationErrors,
+  result: EvaluationResult | CaseErrors,
 ): result is EvaluationResult {
   return !('errors' in result);
 }

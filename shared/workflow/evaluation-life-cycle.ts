@@ -57,11 +57,13 @@ export type EvaluationGuard =
 export type EvaluationEffect =
   | 'sign-prepared'
   | 'sign-reviewed'
+  | 'sign-confirmed'
+  | 'sign-withdrawn'
+  | 'note-return'
   | 'seal'
   | 'supersede-predecessor'
   | 'refresh-laser-reach'
   | 'move-laser'
-  | 'recompute'
   | 'new-review-date'
   | 'block-laser';
 
@@ -80,14 +82,14 @@ export const EVALUATION_LIFE_CYCLE: Machine<
     { from: ['start'],                 event: 'begin',             label: 'Begin an evaluation', actors: ['lso', 'deputy-lso', 'supervisor'], guards: ['rule-set-chosen'], to: 'draft', effects: [] },
     { from: ['draft'],                 event: 'send-to-check',     label: 'Send to check',       actors: ['author'], guards: ['inputs-complete', 'all-lines-covered', 'all-activities-answered', 'evaluates-without-error'], to: 'in-check', effects: ['sign-prepared'] },
     { from: ['draft'],                 event: 'discard',           label: 'Discard',             actors: ['author'], guards: ['reason-given'], to: 'discarded', effects: [], asks: ['reason'] },
-    { from: ['in-check'],              event: 'return',            label: 'Return to the author', actors: ['lso', 'deputy-lso'], guards: ['checker-is-not-author', 'reason-given'], to: 'draft', effects: [], asks: ['reason'] },
+    { from: ['in-check'],              event: 'return',            label: 'Return to the author', actors: ['lso', 'deputy-lso'], guards: ['checker-is-not-author', 'reason-given'], to: 'draft', effects: ['note-return'], asks: ['reason'] },
     { from: ['in-check'],              event: 'confirm',           label: 'Confirm the check',   actors: ['lso', 'deputy-lso'], guards: ['checker-is-not-author', 'laser-inputs-equal', 'evaluates-without-error', 'presence-proven'], to: 'checked', effects: ['sign-reviewed'], asks: ['comment', 'password'] },
-    { from: ['in-check', 'checked'],   event: 'input-changed',     label: 'Change an input',     actors: ['system', 'author'], guards: [], to: 'draft', effects: ['recompute'] },
-    { from: ['checked'],               event: 'return',            label: 'Return to the author', actors: ['lso'], guards: ['reason-given'], to: 'draft', effects: [], asks: ['reason'] },
+    { from: ['in-check', 'checked'],   event: 'input-changed',     label: 'Change an input',     actors: ['system', 'author'], guards: [], to: 'draft', effects: ['note-return'] },
+    { from: ['checked'],               event: 'return',            label: 'Return to the author', actors: ['lso'], guards: ['reason-given'], to: 'draft', effects: ['note-return'], asks: ['reason'] },
     { from: ['checked'],               event: 'sign',              label: 'Sign and seal',       actors: ['lso', 'deputy-lso'], guards: ['approver-is-not-author', 'deputy-has-delegation', 'lso-is-not-a-party', 'laser-inputs-equal', 'evaluates-without-error', 'presence-proven'], to: 'approved', effects: ['seal', 'supersede-predecessor', 'refresh-laser-reach', 'move-laser'], asks: ['comment', 'password'] },
     { from: ['approved'],              event: 'go-stale',          label: 'Becomes stale',       actors: ['system'], guards: [], to: 'stale', effects: ['refresh-laser-reach', 'move-laser'] },
-    { from: ['stale'],                 event: 'confirm-unchanged', label: 'Confirm unchanged',   actors: ['lso'], guards: ['laser-inputs-equal', 'results-equal', 'presence-proven'], to: 'approved', effects: ['new-review-date', 'refresh-laser-reach'], asks: ['comment', 'password'] },
+    { from: ['stale'],                 event: 'confirm-unchanged', label: 'Confirm unchanged',   actors: ['lso'], guards: ['laser-inputs-equal', 'results-equal', 'presence-proven'], to: 'approved', effects: ['sign-confirmed', 'new-review-date', 'refresh-laser-reach'], asks: ['comment', 'password'] },
     { from: ['approved', 'stale'],     event: 'supersede',         label: 'Superseded by a newer version', actors: ['system'], guards: [], to: 'superseded', effects: [] },
-    { from: ['approved', 'stale'],     event: 'withdraw',          label: 'Withdraw as wrong',   actors: ['lso', 'committee'], guards: ['reason-given', 'presence-proven'], to: 'withdrawn', effects: ['refresh-laser-reach', 'block-laser'], asks: ['reason', 'password'] },
+    { from: ['approved', 'stale'],     event: 'withdraw',          label: 'Withdraw as wrong',   actors: ['lso', 'committee'], guards: ['reason-given', 'presence-proven'], to: 'withdrawn', effects: ['sign-withdrawn', 'refresh-laser-reach', 'block-laser'], asks: ['reason', 'password'] },
   ],
 };

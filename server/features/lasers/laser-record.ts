@@ -1,3 +1,4 @@
+import type { PersonRef } from '@shared/model/common';
 import type { LaserInputs } from '@shared/model/evaluations';
 import { laserInputsOf } from '@shared/model/laser-inputs';
 import type { LaserInput, Reach } from '@shared/model/lasers';
@@ -28,8 +29,9 @@ export interface LaserRecord {
   readonly createdAt: string;
   readonly updatedAt: string;
   readonly area: PlaceOf | null;
-  readonly supervisorName: string | null;
-  readonly alternateName: string | null;
+  /** Named on the laser, else of its area. */
+  readonly supervisor: PersonRef | undefined;
+  readonly alternate: PersonRef | undefined;
 }
 
 export interface PlaceOf {

@@ -1,3 +1,4 @@
+import type { PersonRef } from '@shared/model/common';
 import { classRank } from '@shared/model/laser-summary';
 import type { LaserInput, Reach } from '@shared/model/lasers';
 import type { LaserState } from '@shared/workflow/laser-life-cycle';
@@ -26,6 +27,7 @@ interface JoinedRow extends Selectable<LaserTable> {
   area_wall_distance_m: number | null;
   supervisor_name: string | null;
   alternate_name: string | null;
+  area_supervisor_name: string | null;
 }
 
 /** Lasers with their area and people, for one record or a list. */
@@ -35,6 +37,7 @@ export function selectLasers(tx: Tx) {
     .leftJoin('areas', 'areas.id', 'lasers.area_id')
     .leftJoin('people as supervisors', 'supervisors.id', 'lasers.supervisor_id')
     .leftJoin('people as alternates', 'alternates.id', 'lasers.alternate_id')
+    .leftJoin('people as area_supervisors', 'area_supervisors.id', 'areas.supervisor_id')
     .selectAll('lasers')
     .select([
       'areas.code as area_code',
@@ -45,6 +48,7 @@ export function selectLasers(tx: Tx) {
       'areas.wall_distance_m as area_wall_distance_m',
       'supervisors.name as supervisor_name',
       'alternates.name as alternate_name',
+      'area_supervisors.name as area_supervisor_name',
     ]);
 }
 
@@ -233,8 +237,10 @@ export function toLaser(row: JoinedRow, transferArea: PlaceOf | null = null): La
     createdAt: row.created_at,
     updatedAt: row.updated_at,
     area: areaOf(row),
-    supervisorName: row.supervisor_name,
-    alternateName: row.alternate_name,
+    supervisor:
+      personRef(row.supervisor_id, row.supervisor_name) ??
+      personRef(row.area_supervisor_id, row.area_supervisor_name),
+    alternate: personRef(row.alternate_id, row.alternate_name),
   };
 }
 
@@ -250,7 +256,7 @@ function columnsOf(laser: { tag: string; input: LaserInput; area: PlaceOf | null
     area_id: input.areaId ?? null,
     supervisor_id: input.supervisorId ?? null,
     alternate_id: input.alternateId ?? null,
-    department: input.department ?? laser.area?.department ?? null,
+    department: input.department ?? null,
     declared_class: input.declaredClass ?? null,
     verified_class: input.verifiedClass ?? null,
     class_rank: classRank(input.verifiedClass ?? input.declaredClass),
@@ -301,6 +307,10 @@ function markColumns(marks: LaserMarks) {
 async function transferAreaOf(tx: Kysely<Database>, row: JoinedRow): Promise<PlaceOf | null> {
   if (row.transfer_area_id === null) return null;
   return (await findPlace(tx, row.transfer_area_id)) ?? null;
+}
+
+function personRef(id: string | null, name: string | null): PersonRef | undefined {
+  return id !== null && name !== null ? { id, name } : undefined;
 }
 
 function areaOf(row: JoinedRow): PlaceOf | null {

@@ -1,0 +1,281 @@
+import type {
+  duplicateQuerySchema,
+  duplicatesSchema,
+  Laser,
+  LaserFilter,
+  LaserInput,
+  LaserListQuery,
+  LaserPage,
+  LaserTransition,
+} from '@shared/model/lasers';
+import type { FieldError } from '@shared/model/problem';
+import type { LaserEvent } from '@shared/workflow/laser-life-cycle';
+import type * as z from 'zod';
+
+import { changesBetween, recordChange } from '../../audit-trail/record-change';
+import { isInScope, reachOf, requireScope } from '../../auth/scope';
+import type { Context } from '../../context/context';
+import { newId } from '../../db/new-id';
+import { Conflict, InvalidInput } from '../../http/errors';
+import { requireVersion } from '../../http/etag';
+import { evaluationsFollowInputs } from '../evaluations/evaluation-staleness-service';
+import { LASER_WORKFLOW } from './laser-life-cycle';
+import { eachLaser, findBySerial, listLasers } from './laser-queries';
+import {
+  type LaserRecord,
+  type PlaceOf,
+  placementOf,
+  placementOfArea,
+  serialKey,
+} from './laser-record';
+import {
+  addPlace,
+  findLaserIdByTag,
+  findPlace,
+  insertLaser,
+  isPerson,
+  nextTag,
+  updateLaserInput,
+  updateLaserMarks,
+} from './laser-repository';
+import { hashOfInputs, refreshStanding, requireLaser, siteToday } from './laser-standing-service';
+import { moveLaser } from './laser-transition-service';
+import { laserRow, laserView } from './laser-view';
+
+type Entrance = Extract<LaserEvent, 'register' | 'declare-found' | 'request-purchase'>;
+
+export async function readLasers(ctx: Context, query: LaserListQuery): Promise<LaserPage> {
+  const page = await listLasers(ctx.tx, reachOf(ctx, 'laser.read'), query);
+  const today = await siteToday(ctx);
+  return { ...page, rows: page.rows.map((laser) => laserRow(laser, today)) };
+}
+
+/** Every laser within reach that the filter finds, for an export. */
+export function eachLaserInReach(ctx: Context, filter: LaserFilter): AsyncGenerator<LaserRecord> {
+  return eachLaser(ctx.tx, reachOf(ctx, 'laser.read'), filter);
+}
+
+export async function readLaser(ctx: Context, id: string): Promise<Laser> {
+  return laserView(ctx, await requireReadable(ctx, id));
+}
+
+/** A new laser, by one of the ways into the register. */
+export async function enterLaser(ctx: Context, input: LaserInput, by: Entrance): Promise<Laser> {
+  const laser = await storeLaser(ctx, input, by);
+  return laserView(ctx, laser);
+}
+
+/** As `enterLaser`, for many at once: without the view. */
+export async function storeLaser(
+  ctx: Context,
+  given: LaserInput,
+  by: Entrance,
+): Promise<LaserRecord> {
+  const input = withoutBlanks(given);
+  const area = await placeFor(ctx, input);
+  const errors = [
+    ...(await unknownPeople(ctx, input)),
+    ...foreignVerifiedClass(ctx, input, undefined),
+    ...(by === 'declare-found' ? missingDescription(input) : outsideScope(ctx, input, area)),
+  ];
+  if (errors.length > 0) throw new InvalidInput(errors);
+  const tag = input.tag ?? (await nextTag(ctx.tx));
+  await requireFreeTag(ctx, tag, undefined);
+  const id = newId();
+  const at = ctx.now.toISOString();
+  const state = by === 'request-purchase' ? 'requested' : 'received';
+  await insertLaser(ctx.tx, { id, tag, input, area, state, createdBy: ctx.actor.id, at });
+  await addPlace(ctx.tx, { laserId: id, areaId: area?.id ?? null, at });
+  if (input.disposal) await updateLaserMarks(ctx.tx, id, { disposalAskedBy: ctx.actor.id, at });
+  return moveLaser(ctx, await requireLaser(ctx, id), { event: by, input: {}, isNew: true });
+}
+
+export async function changeLaser(
+  ctx: Context,
+  id: string,
+  { version, input: given }: { version: number; input: LaserInput },
+): Promise<Laser> {
+  const before = await requireReadable(ctx, id);
+  requireScope(ctx, 'laser.update', { place: placementOf(before), what: 'laser' });
+  requireVersion(before, version);
+  if (LASER_WORKFLOW.machine.terminal.includes(before.state)) {
+    throw new Conflict('This laser has left the register; its record is closed.');
+  }
+  const input = withoutBlanks({ ...given, tag: given.tag ?? before.tag });
+  const tag = input.tag ?? before.tag;
+  const area = await placeFor(ctx, input);
+  const errors = [
+    ...(await unknownPeople(ctx, input)),
+    ...foreignVerifiedClass(ctx, input, before.input),
+    ...outsideScope(ctx, input, area),
+  ];
+  if (errors.length > 0) throw new InvalidInput(errors);
+  await requireFreeTag(ctx, tag, id);
+
+  const at = ctx.now.toISOString();
+  await updateLaserInput(ctx.tx, before, { input, tag, area, at });
+  if (input.areaId !== before.input.areaId) {
+    await addPlace(ctx.tx, { laserId: id, areaId: area?.id ?? null, at });
+  }
+  await recordChange(ctx, {
+    action: 'laser.update',
+    recordKind: 'laser',
+    recordId: id,
+    recordName: tag,
+    changes: changesBetween({ ...before.input, tag: before.tag }, input),
+  });
+  await noteDisposal(ctx, before, input);
+  await follow(ctx, before);
+  return laserView(ctx, await requireLaser(ctx, id));
+}
+
+export async function transitionLaser(
+  ctx: Context,
+  id: string,
+  { version, step }: { version: number; step: LaserTransition },
+): Promise<Laser> {
+  const before = await requireReadable(ctx, id);
+  const places = [placementOf(before)];
+  if (before.transferArea) places.push(placementOfArea(before.transferArea));
+  const [place, ...others] = places;
+  if (!others.some((other) => isInScope(ctx, 'laser.transition', other))) {
+    requireScope(ctx, 'laser.transition', { place: place!, what: 'laser' });
+  }
+  requireVersion(before, version);
+  const { event, reason, waiver, areaId } = step;
+  const area = areaId === undefined ? undefined : await requirePlace(ctx, areaId);
+  await moveLaser(ctx, before, {
+    event,
+    input: { ...(reason ? { reason } : {}), ...(waiver ? { waiver } : {}), ...(area ? { area } : {}) },
+  });
+  await follow(ctx, before);
+  return laserView(ctx, await requireLaser(ctx, id));
+}
+
+/** Other lasers with the same serial, whatever the spelling. */
+export async function readDuplicates(
+  ctx: Context,
+  query: z.infer<typeof duplicateQuerySchema>,
+): Promise<z.infer<typeof duplicatesSchema>> {
+  const key = serialKey(query.serial);
+  if (key === null) return { lasers: [] };
+  const found = await findBySerial(ctx.tx, { key, maker: query.maker, exceptId: query.exceptId });
+  return {
+    lasers: found.map(({ id, tag, input, area }) => ({
+      id,
+      tag,
+      maker: input.maker,
+      model: input.model,
+      ...(area ? { areaCode: area.code } : {}),
+    })),
+  };
+}
+
+/** A laser that the person may read; 404 otherwise. */
+export async function requireReadable(ctx: Context, id: string): Promise<LaserRecord> {
+  const laser = await requireLaser(ctx, id);
+  const places = [placementOf(laser)];
+  if (laser.transferArea) places.push(placementOfArea(laser.transferArea));
+  if (!places.some((place) => isInScope(ctx, 'laser.read', place))) {
+    requireScope(ctx, 'laser.read', { place: places[0]!, what: 'laser' });
+  }
+  return laser;
+}
+
+/** Evaluations and the standing follow, in the same transaction, what the laser has become. */
+async function follow(ctx: Context, before: LaserRecord): Promise<void> {
+  const after = await requireLaser(ctx, before.id);
+  if (hashOfInputs(after) !== hashOfInputs(before)) await evaluationsFollowInputs(ctx, before.id);
+  await refreshStanding(ctx, before.id);
+}
+
+async function noteDisposal(ctx: Context, before: LaserRecord, input: LaserInput): Promise<void> {
+  const asked = Boolean(input.disposal);
+  if (asked === Boolean(before.input.disposal)) return;
+  await updateLaserMarks(ctx.tx, before.id, {
+    disposalAskedBy: asked ? ctx.actor.id : null,
+    at: ctx.now.toISOString(),
+  });
+}
+
+async function placeFor(ctx: Context, input: LaserInput): Promise<PlaceOf | null> {
+  return input.areaId === undefined ? null : requirePlace(ctx, input.areaId);
+}
+
+async function requirePlace(ctx: Context, areaId: string): Promise<PlaceOf> {
+  const place = await findPlace(ctx.tx, areaId);
+  if (place) return place;
+  throw new InvalidInput([
+    { path: 'areaId', message: 'There is no such area.', allowed: 'an area on record' },
+  ]);
+}
+
+async function unknownPeople(ctx: Context, input: LaserInput): Promise<FieldError[]> {
+  const errors: FieldError[] = [];
+  for (const path of ['supervisorId', 'alternateId'] as const) {
+    const id = input[path];
+    if (id !== undefined && !(await isPerson(ctx.tx, id))) {
+      errors.push({ path, message: 'There is no such person.', allowed: 'a person on record' });
+    }
+  }
+  return errors;
+}
+
+function foreignVerifiedClass(
+  ctx: Context,
+  input: LaserInput,
+  before: LaserInput | undefined,
+): FieldError[] {
+  if (input.verifiedClass === before?.verifiedClass || ctx.actor.roles.includes('lso')) return [];
+  const allowed = before?.verifiedClass
+    ? `the class that is on record: ${before.verifiedClass}`
+    : 'nothing, until the LSO has verified the class';
+  return [
+    {
+      path: 'verifiedClass',
+      message: 'Only the laser safety officer sets the verified class.',
+      allowed,
+    },
+  ];
+}
+
+function missingDescription(input: LaserInput): FieldError[] {
+  if (input.note) return [];
+  return [
+    {
+      path: 'note',
+      message: 'Describe the laser: where it was found, what it looks like, whose it may be.',
+      allowed: 'a description',
+    },
+  ];
+}
+
+/** Whoever supervises areas enters lasers there, or lasers of their own. */
+function outsideScope(ctx: Context, input: LaserInput, area: PlaceOf | null): FieldError[] {
+  if (isInScope(ctx, 'laser.register', placementOf({ input, area }))) return [];
+  return [
+    {
+      path: 'areaId',
+      message: area
+        ? `You do not supervise ${area.code}. To hand a laser over, use the transfer.`
+        : 'Choose the area of the laser.',
+      allowed: 'an area that you supervise',
+    },
+  ];
+}
+
+async function requireFreeTag(ctx: Context, tag: string, ownId: string | undefined): Promise<void> {
+  const holder = await findLaserIdByTag(ctx.tx, tag);
+  if (!holder || holder.id === ownId) return;
+  const message = `The tag ${tag} is taken by another laser.`;
+  throw new Conflict(message, [{ path: 'tag', message, allowed: 'a tag that is free, or none' }]);
+}
+
+/** An empty text is no text. */
+function withoutBlanks(input: LaserInput): LaserInput {
+  return { ...filled(input), emissions: input.emissions.map(filled) };
+}
+
+function filled<T extends object>(record: T): T {
+  return Object.fromEntries(Object.entries(record).filter(([, value]) => value !== '' && value !== undefined)) as T;
+}

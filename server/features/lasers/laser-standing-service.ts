@@ -1,0 +1,94 @@
+import { hashedInputs } from '@shared/model/laser-inputs';
+import type { EvaluationInput } from '@shared/model/evaluations';
+import type { ScenarioResult } from '@shared/model/evaluation-case';
+import { reachOf } from '@shared/model/reach-of';
+import type { Reach } from '@shared/model/lasers';
+import { localDateAt, type LocalDate } from '@shared/model/local-date';
+
+import { sha256OfJson } from '../../audit-trail/row-hash';
+import type { Context } from '../../context/context';
+import { NotFound } from '../../http/errors';
+import { readSettings } from '../settings/settings-service';
+import { attentionRank } from './laser-attention';
+import type { LaserSubject } from './laser-life-cycle';
+import { inputsOf, type LaserRecord } from './laser-record';
+import { findLaser, type LaserStanding, updateLaserStanding } from './laser-repository';
+import { countPhotos, findSealedEvaluation, hasOpenEvaluation } from './laser-evaluation-queries';
+
+type Reading = Pick<Context, 'tx'>;
+
+/** The laser with this id, whatever its place; 404 when there is none. */
+export async function requireLaser(ctx: Reading, id: string): Promise<LaserRecord> {
+  const laser = await findLaser(ctx.tx, id);
+  if (!laser) throw new NotFound('laser');
+  return laser;
+}
+
+/** SHA-256 of the inputs that an evaluation of this laser rests on, as they are now. */
+export function hashOfInputs(laser: Pick<LaserRecord, 'input' | 'area'>): string {
+  return sha256OfJson(hashedInputs(inputsOf(laser)));
+}
+
+/** Today at the site. */
+export async function siteToday(ctx: Reading & Pick<Context, 'now'>): Promise<LocalDate> {
+  const { zone } = await readSettings(ctx);
+  return localDateAt(ctx.now, zone);
+}
+
+/** The laser with the facts that its guards look at. */
+export async function laserSubject(
+  ctx: Reading & Pick<Context, 'now'>,
+  laser: LaserRecord,
+): Promise<LaserSubject> {
+  const sealed = await findSealedEvaluation(ctx.tx, laser.id);
+  const inputsEqualSealed = sealed?.laser_inputs_hash === hashOfInputs(laser);
+  return {
+    laser,
+    today: await siteToday(ctx),
+    photos: await countPhotos(ctx.tx, laser.id),
+    inputsEqualSealed,
+    hasCurrentEvaluation: inputsEqualSealed && sealed?.state === 'approved',
+  };
+}
+
+/** Writes what follows for the laser from its evaluations and from the date: reach, attention. */
+export async function refreshStanding(ctx: Context, laserId: string): Promise<void> {
+  const laser = await requireLaser(ctx, laserId);
+  const standing = await standingOf(ctx, laser);
+  const today = await siteToday(ctx);
+  await updateLaserStanding(ctx.tx, laserId, {
+    ...standing,
+    attentionRank: attentionRank({ ...laser, ...standing }, today),
+  });
+}
+
+async function standingOf(
+  ctx: Context,
+  laser: LaserRecord,
+): Promise<Omit<LaserStanding, 'attentionRank'>> {
+  const sealed = await findSealedEvaluation(ctx.tx, laser.id);
+  if (!sealed) {
+    const isOpen = await hasOpenEvaluation(ctx.tx, laser.id);
+    return { standing: isOpen ? 'open' : 'none', reviewOn: null, reach: null };
+  }
+  const known = laser.reach?.evaluationId === sealed.id ? laser.reach : undefined;
+  return {
+    standing: sealed.state,
+    reviewOn: sealed.review_on,
+    reach: known ? { ...known, state: sealed.state } : sealedReach(sealed),
+  };
+}
+
+type Sealed = NonNullable<Awaited<ReturnType<typeof findSealedEvaluation>>>;
+
+function sealedReach(sealed: Sealed): Reach | null {
+  const input = JSON.parse(sealed.input) as EvaluationInput;
+  const reach = reachOf(input, JSON.parse(sealed.results) as ScenarioResult[]);
+  if (!reach) return null;
+  return {
+    ...reach,
+    evaluationId: sealed.id,
+    evaluationNumber: sealed.number,
+    state: sealed.state,
+  };
+}

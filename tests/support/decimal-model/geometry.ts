@@ -33,11 +33,7 @@ export function widthsAt(beam: ModelBeam, path: ModelPath, growth: Growth, r: De
   }
 }
 
-function fiberWidth(
-  beam: ModelBeam,
-  path: Extract<ModelPath, { kind: 'fiber' }>,
-  r: Dec,
-): Dec {
+function fiberWidth(beam: ModelBeam, path: Extract<ModelPath, { kind: 'fiber' }>, r: Dec): Dec {
   if ('numericalAperture' in path) {
     return r.mul(2).mul(dec(path.numericalAperture)).div(FIVE_PERCENT);
   }

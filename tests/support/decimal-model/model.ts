@@ -1,12 +1,6 @@
 import { axes, type ModelBeam, type ModelCase, type ModelPath } from './case';
 import { Dec, ONE, PI, ZERO, dec, maxOf, minOf } from './decimal';
-import {
-  airTransmission,
-  apertureFraction,
-  isGaussian,
-  widthsAt,
-  type Growth,
-} from './geometry';
+import { airTransmission, apertureFraction, isGaussian, widthsAt, type Growth } from './geometry';
 import { SMALL, type Side, type Source } from './limits';
 import { candidatesOf, type Candidate } from './pulses';
 
@@ -137,7 +131,8 @@ export class HazardModel {
 
   /** The apparent source: given, or the illuminated spot seen from r; larger through an aid. */
   private source(beam: ModelBeam, r: Dec, view: View): Source {
-    const larger = view.aided && this.aidWorks(beam) ? dec(this.hazardCase.aid!.magnification) : ONE;
+    const larger =
+      view.aided && this.aidWorks(beam) ? dec(this.hazardCase.aid!.magnification) : ONE;
     if (this.path.kind === 'diffuse' && this.path.spotMm !== undefined) {
       const plain = dec(this.path.spotMm).div(r).mul(larger);
       return { x: plain.mul(cosine(this.path.angleDeg)), y: plain };
@@ -264,7 +259,8 @@ function discArea(diameterM: Dec): Dec {
   return PI.mul(diameterM.pow(2)).div(4);
 }
 
-function largest(compared: readonly Compared[]): Compared {
+/** What exceeds its limit most. */
+export function largest(compared: readonly Compared[]): Compared {
   return compared.reduce((a, b) => (b.ratio.gt(a.ratio) ? b : a));
 }
 

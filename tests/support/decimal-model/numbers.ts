@@ -1,7 +1,7 @@
 import type { Emission, ModelCase } from './case';
 import { Dec, ONE, dec } from './decimal';
 import type { Side } from './limits';
-import { HazardModel, type Compared, type ModelSideResult } from './model';
+import { HazardModel, largest, type ModelSideResult } from './model';
 
 /** The numbers of a result by a dotted name, as both model and engine can give them. */
 export type Numbers = Readonly<Record<string, number>>;
@@ -28,7 +28,8 @@ export function modelNumbers(input: ModelCase): Numbers {
 
 function sideNumbers(input: ModelCase, side: Side, model: HazardModel): Numbers {
   const result = model.evaluate(side);
-  const exposureS = side === 'eye' ? input.exposure.eyeS : (input.exposure.skinS ?? input.exposure.eyeS);
+  const exposureS =
+    side === 'eye' ? input.exposure.eyeS : (input.exposure.skinS ?? input.exposure.eyeS);
   const numbers: Record<string, number> = {
     [`${side}.opticalDensity`]: result.opticalDensity.toNumber(),
     [`${side}.hazardDistance`]: result.hazardDistanceM.toNumber(),
@@ -60,20 +61,11 @@ function beamNumbers(
     [`${prefix}.opticalDensity`]: beam.opticalDensity.toNumber(),
   };
   if (beam.at) {
-    const there = sameCandidate(beam.at.compared, beam.governing);
+    const there = largest(beam.at.compared);
     numbers[`${prefix}.at.radiantExposure`] = there.exposure.toNumber();
     numbers[`${prefix}.at.opticalDensity`] = beam.at.ratio.gt(1)
       ? beam.at.ratio.log(10).toNumber()
       : 0;
   }
   return numbers;
-}
-
-/** The exposure at a place over the aperture of the limit that governs at the worst place. */
-function sameCandidate(there: readonly Compared[], governing: Compared): Compared {
-  const { rule, mechanism, tissue } = governing.candidate;
-  return there.find(
-    ({ candidate }) =>
-      candidate.rule === rule && candidate.mechanism === mechanism && candidate.tissue === tissue,
-  )!;
 }

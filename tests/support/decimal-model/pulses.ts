@@ -95,9 +95,8 @@ const COUNTED_WITHIN_T2: readonly RuleSetId[] = [
 
 /** The pulse-train rule: thermal additivity, pulses within T_i taken as one. */
 function train(question: Question, emission: Repeated): Candidate[] {
-  const { side, at, exposureS } = question;
-  if (side === 'skin' && at.ruleSet !== 'eu-2006-25') return [];
-  const row = reductionRow(at);
+  const { at, exposureS } = question;
+  const row = reductionRow(question);
   const confinementS = factor('Ti', { ...at, durationS: exposureS });
   if (!row && !confinementS) return [];
 
@@ -107,12 +106,24 @@ function train(question: Question, emission: Repeated): Candidate[] {
   const size = grouped ?? ONE;
   const pulses = pulsesWithin(emission, countingTime(question)).div(size);
   const reduction = row ? reductionFactor(question, { durationS, pulses, confinementS }) : ONE;
-  return read(question, 'pulse-train', durationS, reduction.div(size)).filter(
-    (candidate) => candidate.mechanism !== 'photochemical',
+  return read(question, 'pulse-train', durationS, ONE.div(size))
+    .filter((candidate) => candidate.mechanism !== 'photochemical')
+    .map((candidate) => ({
+      ...candidate,
+      limit: candidate.limit.mul(isAnteriorCap(question, candidate) ? ONE : reduction),
+    }));
+}
+
+/** C_P is a rule of the retina between 400 and 1400 nm: the cap of the front of the eye is apart. */
+function isAnteriorCap({ side, at }: Question, { mechanism }: Candidate): boolean {
+  return (
+    side === 'eye' && at.wavelengthNm >= 400 && at.wavelengthNm < 1400 && mechanism === 'corneal'
   );
 }
 
-function reductionRow(at: Question['at']) {
+/** The line of C_P; of the skin only where the rule set reduces its limits as well. */
+function reductionRow({ side, at }: Question) {
+  if (side === 'skin' && at.ruleSet !== 'eu-2006-25') return undefined;
   const name = at.ruleSet === 'iec-60825-1-2014' ? 'factor:C5' : 'factor:C_P';
   return rowsAt({ ruleSet: at.ruleSet, target: name }, at.wavelengthNm)[0];
 }
@@ -145,7 +156,7 @@ interface Train {
 
 function reductionFactor(question: Question, { durationS, pulses, confinementS }: Train): Dec {
   const { at, exposureS } = question;
-  const row = reductionRow(at)!;
+  const row = reductionRow(question)!;
   if (durationS > row.t_s[1]) return ONE;
   const value = row.value(
     scopeOf(

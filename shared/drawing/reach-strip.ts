@@ -240,3 +240,21 @@ function unknown(metrics: ReachMetrics): Shape[] {
   }));
   return [dashed, ...marks];
 }
+
+/** A piece of one lane, for a legend. */
+export function laneSample(side: ReachSide, metrics: ReachMetrics): Drawing {
+  const lane = lanesOf(
+    { eyeDistanceM: 1, skinDistanceM: 1, aidedDistanceM: 2 },
+    { ...metrics, left: 0 },
+  ).find((candidate) => candidate.side === side);
+  const height = lane?.height ?? 0;
+  const width = 22;
+  const shapes = lane ? laneShapes({ ...lane, x: width, y: 0 }, { ...metrics, left: 0 }, null) : [];
+  return { width, height, shapes };
+}
+
+/** A piece of wall, for a legend. */
+export function wallSample(): Drawing {
+  const d = linePath(1.5, 0, 1.5, 12) + linePath(4.5, 0, 4.5, 12);
+  return { width: 6, height: 12, shapes: [{ kind: 'path', d, stroke: 'ink', strokeWidth: 1 }] };
+}

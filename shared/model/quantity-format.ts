@@ -76,6 +76,14 @@ export function formatInput(value: number, unit: string): string {
   return `${value < 0 ? '-' : ''}${shown.number} ${shown.unit}`;
 }
 
+/** The value without a prefix, to ten digits: what a field holds, in the unit of its contract. */
+export function formatHeld(value: number, unit: string): string {
+  if (value === 0) return join('0', unit).text;
+  const { digits, point } = digitsOf(Math.abs(value));
+  const sign = value < 0 ? '−' : '';
+  return sign + placeAt({ digits, point }, unit, { figures: 0, plain: false, exponent: 0 }).text;
+}
+
 /** An optical density, rounded up to two decimals. */
 export function formatOpticalDensity(density: number, decimals = 2): string {
   if (!Number.isFinite(density)) return '–';
@@ -161,20 +169,35 @@ function round({ digits, point }: Digits, figures: number, rounding: Rounding): 
 }
 
 /** Puts the point by the prefix that leaves one to three digits before it. */
-function place({ digits, point }: Digits, unit: string, figures: number, plain = false) {
+function place(shown: Digits, unit: string, figures: number, plain = false): FormattedQuantity {
   const prefixes = PREFIXES_OF[unit];
   // The quarter of a second of the blink is known as 0.25 s, not as 250 ms.
-  const prefixless = !prefixes || (unit === 's' && point === 0);
-  const chosen = prefixless ? { prefix: '', exponent: 0 } : prefixFor(point, prefixes);
-  const at = point - chosen.exponent;
-  const exponential = at > 7 || at < -3;
-  const symbol = exponential ? unit : chosen.prefix + unit;
-  if (!exponential) {
-    const number = withPoint(digits.padEnd(figures, '0'), at);
-    return join(plain ? number : grouped(number), symbol);
-  }
-  const mantissa = withPoint(digits.padEnd(figures, '0'), 1);
-  return join(mantissa + power(point - 1, plain), symbol);
+  const prefixless = !prefixes || (unit === 's' && shown.point === 0);
+  const chosen = prefixless ? { prefix: '', exponent: 0 } : prefixFor(shown.point, prefixes);
+  const symbol = isDecimal(shown.point - chosen.exponent) ? chosen.prefix + unit : unit;
+  return placeAt(shown, symbol, { figures, plain, exponent: chosen.exponent });
+}
+
+interface Placing {
+  readonly figures: number;
+  /** Without groups and with "e" for powers of ten, as an input field takes it. */
+  readonly plain: boolean;
+  /** Power of ten that the unit's prefix stands for. */
+  readonly exponent: number;
+}
+
+function placeAt({ digits, point }: Digits, symbol: string, placing: Placing): FormattedQuantity {
+  const { figures, plain, exponent } = placing;
+  const padded = digits.padEnd(figures, '0');
+  const at = point - exponent;
+  if (!isDecimal(at)) return join(withPoint(padded, 1) + power(point - 1, plain), symbol);
+  const number = withPoint(padded, at);
+  return join(plain ? number : grouped(number), symbol);
+}
+
+/** Whether a number with its point there is read easily without a power of ten. */
+function isDecimal(at: number): boolean {
+  return at <= 7 && at >= -3;
 }
 
 function prefixFor(point: number, prefixes: readonly string[]) {

@@ -1,4 +1,10 @@
-import { ChangeDetectionStrategy, Component, type ElementRef, inject, viewChild } from '@angular/core';
+import {
+  ChangeDetectionStrategy,
+  Component,
+  type ElementRef,
+  inject,
+  viewChild,
+} from '@angular/core';
 import { Router } from '@angular/router';
 
 import { Icon } from '../../ui/icon/icon';

@@ -1,4 +1,12 @@
-import { computed, DestroyRef, Directive, inject, type OnInit, signal, type Signal } from '@angular/core';
+import {
+  computed,
+  DestroyRef,
+  Directive,
+  inject,
+  type OnInit,
+  signal,
+  type Signal,
+} from '@angular/core';
 import { NgControl, type ValidationErrors } from '@angular/forms';
 
 import { Field } from './field';

@@ -1,5 +1,6 @@
 import type { HazardCase } from './case';
 import { cautionsOf } from './cautions';
+import { derive } from './derivation/derive';
 import { ENGINE_VERSION } from './engine-version';
 import { parseCase } from './parse-case';
 import { sideResult } from './side-result';
@@ -52,6 +53,7 @@ function evaluateCase(hazardCase: HazardCase, bare: boolean): EvaluationResult {
     warnings: warningsOf(scene, eye, skin),
     cautions: cautionsOf(ruleSet),
   };
+  if (!bare) result.steps = derive(scene, eye, skin);
   return hazardCase.id === undefined ? result : { id: hazardCase.id, ...result };
 }
 

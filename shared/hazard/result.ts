@@ -95,8 +95,9 @@ export interface SideResult {
 }
 
 /**
- * One step of the derivation. `formula` and `substituted` are plain infix mathematics
- * (+ - * / ^ and exp, log, log10, sqrt, min, max, ceil, pi); `substituted` evaluates to `value`.
+ * One step of the derivation. `formula` and `substituted` are plain infix mathematics: + - * / ^,
+ * exp, expm1, log (natural), log1p, log10, sqrt, min, max, ceil, abs, cos and pi; `substituted`
+ * evaluates to `value`.
  */
 export interface Step {
   symbol: string;
@@ -106,6 +107,9 @@ export interface Step {
   value: number;
   unit: string;
   source: string;
+  side: Side;
+  /** Index of the beam; without it the step is about all beams. */
+  beam?: number;
 }
 
 /** Something the reader of a result must know. */

@@ -1,6 +1,6 @@
 import { factorsOf } from './factors-used';
 import { comparableLimit } from './limit-terms';
-import { printLimit } from './limits/print-limit';
+import { printCandidate } from './derivation/print-candidate';
 import { photonOf } from './photon';
 import { irradiancePerExposure } from './pulses/emission-timing';
 import type { LimitCandidate as Candidate } from './pulses/limit-candidates';
@@ -81,7 +81,7 @@ function candidateResult(
   { sceneBeam, situation, distanceM }: BeamHazard,
   candidate: Candidate,
 ): LimitCandidate {
-  const { row, durationS, apertureM, limit, sharedBy, train } = candidate;
+  const { row, durationS, apertureM, limit } = candidate;
   const { symbols } = rules.ruleSet.factors;
   const exposure = meanExposure(sceneBeam, apertureM, distanceM);
   return {
@@ -92,11 +92,7 @@ function candidateResult(
     durationS,
     limitingApertureMm: apertureM * 1e3,
     exposureToLimit: exposure / comparableLimit(candidate),
-    formula: [
-      printLimit(row, situation.point, durationS, symbols),
-      train === undefined ? '' : `*${symbols.CP}`,
-      sharedBy === 1 ? '' : candidate.rule === 'average' ? '/N' : '/n_g',
-    ].join(''),
+    formula: printCandidate(candidate, situation.point, symbols),
     source: SOURCES[(row.reference ?? row.printed).source].cite,
   };
 }

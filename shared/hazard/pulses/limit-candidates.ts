@@ -30,8 +30,9 @@ export interface LimitCandidate {
   /** What the candidate allows: CW over the exposure, pulsed per pulse, J/m². */
   readonly limit: number;
   readonly apertureM: number;
-  /** Pulses that share the row's limit: N of the average rule, n_g of a group. */
+  /** Pulses that share the row's limit, and their symbol. */
   readonly sharedBy: number;
+  readonly sharedBySymbol: '' | 'N' | 'n_b' | 'n_g';
   readonly train: TrainReading | undefined;
 }
 
@@ -53,19 +54,29 @@ export interface LimitSituation {
   readonly hasT2: boolean;
 }
 
+/** The pulses that share one limit. */
+interface PulsesSharing {
+  readonly count: number;
+  readonly symbol: LimitCandidate['sharedBySymbol'];
+}
+
+const ONE: PulsesSharing = { count: 1, symbol: '' };
+
 /** Every limit that the emission has to keep; the order decides between equals. */
 export function limitCandidates(situation: LimitSituation): LimitCandidate[] {
   const { emission, exposureS } = situation;
   const candidates: LimitCandidate[] = [];
   if (emission.mode === 'cw') {
-    addRows(candidates, situation, 'continuous', exposureS, 1);
+    addRows(candidates, situation, 'continuous', exposureS, ONE);
     return candidates;
   }
-  addRows(candidates, situation, 'single-pulse', emission.pulseDurationS, 1);
+  addRows(candidates, situation, 'single-pulse', emission.pulseDurationS, ONE);
   if (emission.mode === 'single') return candidates;
-  addRows(candidates, situation, 'average', exposureS, pulsesWithin(emission, exposureS));
+  const pulses = { count: pulsesWithin(emission, exposureS), symbol: 'N' } as const;
+  addRows(candidates, situation, 'average', exposureS, pulses);
   if (emission.mode === 'burst') {
-    addRows(candidates, situation, 'average', burstDuration(emission), emission.pulsesPerBurst);
+    const ofBurst = { count: emission.pulsesPerBurst, symbol: 'n_b' } as const;
+    addRows(candidates, situation, 'average', burstDuration(emission), ofBurst);
   }
   addTrain(candidates, situation, emission);
   return candidates;
@@ -76,14 +87,14 @@ function addRows(
   { point }: LimitSituation,
   rule: LimitRule,
   durationS: number,
-  sharedBy: number,
+  pulses: PulsesSharing,
 ): void {
   const tabulatedS = tabulatedDuration(point, durationS);
   for (const row of rowsFor(point)) {
     if (!appliesAt(row, point, tabulatedS)) continue;
     const rowLimit = radiantExposureLimit(row, point, durationS);
     const apertureM = limitingApertureMm(row, point, durationS) * 1e-3;
-    const limit = rowLimit / sharedBy;
+    const limit = rowLimit / pulses.count;
     candidates.push({
       rule,
       row,
@@ -91,7 +102,8 @@ function addRows(
       rowLimit,
       limit,
       apertureM,
-      sharedBy,
+      sharedBy: pulses.count,
+      sharedBySymbol: pulses.symbol,
       train: undefined,
     });
   }
@@ -108,7 +120,7 @@ function addTrain(
   const tiS = ti === undefined ? 0 : factorValue(ti, point.wavelengthNm);
   const group = pulseGroup(emission, Math.min(tiS, exposureS));
   if (group.pulses === 1 && pulseTrain.length === 0) return;
-  const pulses = Math.max(1, pulsesCounted(situation, emission) / group.pulses);
+  const pulses = Math.max(1, pulsesWithin(emission, countingTime(situation)) / group.pulses);
   const train = trainReading(situation, group.durationS, group.durationS <= tiS, pulses);
   const tabulatedS = tabulatedDuration(point, group.durationS);
   for (const row of rowsFor(point)) {
@@ -123,17 +135,13 @@ function addTrain(
       limit: (rowLimit * train.factor) / group.pulses,
       apertureM: limitingApertureMm(row, point, group.durationS) * 1e-3,
       sharedBy: group.pulses,
+      sharedBySymbol: group.pulses > 1 ? 'n_g' : '',
       train,
     });
   }
 }
 
-/** N within the exposure, or within T_2 when the edition says so and it is shorter. */
-function pulsesCounted(situation: LimitSituation, emission: PulsedEmission): number {
-  return pulsesWithin(emission, countingTime(situation));
-}
-
-/** The time within which the pulse-train rule counts, s. */
+/** What the pulse-train rule counts within: the exposure, or T_2 when the edition says so and it is shorter; s. */
 export function countingTime({ point, exposureS, trainRule, hasT2 }: LimitSituation): number {
   const isShortened = trainRule.countedWithin === 'T2' && hasT2 && point.band.isRetinal;
   return isShortened ? Math.min(exposureS, breakTimeT2(point.source)) : exposureS;

@@ -1,0 +1,203 @@
+import { ALPHA_MIN_MRAD, isExtended, meanInside } from '../factors/apparent-source';
+import { breakTimeT2, T2_LARGEST_MRAD } from '../factors/break-time-t2';
+import { correctionFactorCE } from '../factors/correction-factor-ce';
+import { durationRowAt, factorRowAt, factorValue } from '../factors/factor-value';
+import { alphaMax, coneFactor, gammaPh, tabulatedDuration } from '../limits/row-reading';
+import type { LimitCandidate, LimitSituation } from '../pulses/limit-candidates';
+import type { DurationRow, FactorRow, FactorSymbol } from '../rule-sets/limit-table';
+import type { RuleSet } from '../rule-sets/rule-set';
+import type { StepWriter } from './step-writer';
+
+/** The factors of a candidate's row. */
+export function writeFactors(
+  writer: StepWriter,
+  ruleSet: RuleSet,
+  situation: LimitSituation,
+  candidate: LimitCandidate,
+): void {
+  const { row } = candidate;
+  const { symbols } = ruleSet.factors;
+  for (const symbol of row.printed.factors ?? []) {
+    if (symbol === 'CE') writeCE(writer, ruleSet, situation, candidate);
+    else if (symbol !== 'T2^-1/4') writeWavelengthFactor(writer, ruleSet, situation, symbol);
+  }
+  if (row.hasT2 || row.from === 'T2' || row.to === 'T2') writeT2(writer, ruleSet, situation);
+  if (row.from === 'T1' || row.to === 'T1') {
+    writeFactorRow(writer, situation.point.band.t1, situation, {
+      symbol: symbols.T1,
+      what: 'Break time',
+      unit: 's',
+    });
+  }
+  const isConed = row.mechanism === 'photochemical' && situation.point.band.isRetinal;
+  const tabulatedS = tabulatedDuration(situation.point, candidate.durationS);
+  if (isConed && coneFactor(situation.point, tabulatedS) > 1) {
+    writeDurationRow(writer, situation.point.band.gammaPh, tabulatedS, {
+      symbol: 'gamma_ph',
+      what: 'Limiting cone of the photochemical limit, smaller than the source',
+      value: gammaPh(situation.point, tabulatedS),
+      unit: 'mrad',
+    });
+  }
+}
+
+function writeWavelengthFactor(
+  writer: StepWriter,
+  { factors }: RuleSet,
+  situation: LimitSituation,
+  symbol: Exclude<FactorSymbol, 'CE' | 'T2^-1/4'>,
+): void {
+  const row = factorRowAt(factors[symbol], situation.point.wavelengthNm);
+  if (row !== undefined) {
+    const draft = { symbol: factors.symbols[symbol], what: FACTORS[symbol], unit: '1' };
+    writeFactorRow(writer, row, situation, draft);
+    return;
+  }
+  writer.write({
+    symbol: factors.symbols[symbol],
+    what: `${FACTORS[symbol]} (1 at this wavelength)`,
+    formula: '1',
+    value: 1,
+    unit: '1',
+    source: 'engine:reading',
+  });
+}
+
+const FACTORS = {
+  CA: 'Factor for absorption by melanin',
+  CB: 'Factor for the photochemical effect',
+  CC: 'Factor for absorption in front of the retina',
+  KL: 'Factor for cornea and lens',
+  C2: 'Factor for ultraviolet',
+} as const;
+
+function writeFactorRow(
+  writer: StepWriter,
+  row: FactorRow | undefined,
+  { point }: LimitSituation,
+  draft: { symbol: string; what: string; unit: string },
+): void {
+  if (row === undefined) return;
+  writer.write({
+    ...draft,
+    formula: printFactor(row),
+    value: factorValue(row, point.wavelengthNm),
+    source: row.source,
+  });
+}
+
+/** `8+10^(0.04*(lambda-1250))`, from the same row as the number. */
+export function printFactor({ coefficient, decadesPerNm, originNm, plus }: FactorRow): string {
+  if (decadesPerNm === undefined) return `${coefficient}`;
+  const difference =
+    decadesPerNm < 0
+      ? `${-decadesPerNm}*(${originNm}-lambda)`
+      : `${decadesPerNm}*(lambda-${originNm})`;
+  const power = `${coefficient === 1 ? '' : `${coefficient}*`}10^(${difference})`;
+  return plus === undefined ? power : `${plus}+${power}`;
+}
+
+function writeDurationRow(
+  writer: StepWriter,
+  rows: readonly DurationRow[],
+  durationS: number,
+  draft: { symbol: string; what: string; value: number; unit: string },
+): void {
+  const row = durationRowAt(rows, rows[0]?.wavelengthNm[0] ?? 0, durationS);
+  if (row === undefined) return;
+  writer.know('t', durationS);
+  writer.write({ ...draft, formula: printDurationRow(row), source: row.source });
+}
+
+/** C_E with the mean angle and α_max that it is made from. */
+function writeCE(
+  writer: StepWriter,
+  ruleSet: RuleSet,
+  { point }: LimitSituation,
+  { durationS }: LimitCandidate,
+): void {
+  const tabulatedS = tabulatedDuration(point, durationS);
+  const largest = alphaMax(point, tabulatedS);
+  const { CE } = ruleSet.factors.symbols;
+  const source = point.band.alphaMax[0]?.source ?? 'engine:reading';
+  writeDurationRow(writer, point.band.alphaMax, tabulatedS, {
+    symbol: 'alpha_max',
+    what: 'Largest angle that the factor for extended sources grows with',
+    value: largest,
+    unit: 'mrad',
+  });
+  writer.write({
+    symbol: 'alpha',
+    what: 'Mean angle of the source, each axis inside [alpha_min, alpha_max]',
+    formula: '(min(max(alpha_x,alpha_min),alpha_max)+min(max(alpha_y,alpha_min),alpha_max))/2',
+    value: meanInside(point.source, largest),
+    unit: 'mrad',
+    source: 'engine:reading',
+  });
+  const value = correctionFactorCE(point.source, largest);
+  writer.write({
+    symbol: CE,
+    what: 'Factor for extended sources, for the exposure of the whole source',
+    formula: 'alpha/alpha_min*max(1,alpha_x/alpha_max)*max(1,alpha_y/alpha_max)',
+    value,
+    unit: '1',
+    source,
+  });
+  if (point.source.xMrad > largest || point.source.yMrad > largest) {
+    writeConeForm(writer, point.source, largest, CE);
+  }
+}
+
+/** The other way to print C_E: with the exposure taken inside the cone α_max. Same ratio. */
+function writeConeForm(
+  writer: StepWriter,
+  source: LimitSituation['point']['source'],
+  alphaMaxMrad: number,
+  symbol: string,
+): void {
+  writer.write({
+    symbol: `${symbol}_cone`,
+    what: 'The same factor where the exposure is taken inside the cone alpha_max only',
+    formula: 'alpha/alpha_min',
+    value: meanInside(source, alphaMaxMrad) / ALPHA_MIN_MRAD,
+    unit: '1',
+    source: 'engine:reading',
+  });
+  writer.write({
+    symbol: 'k_cone',
+    what: 'Part of the exposure inside that cone; divided by it, both forms give the same ratio',
+    formula: 'min(1,alpha_max/alpha_x)*min(1,alpha_max/alpha_y)',
+    value: Math.min(1, alphaMaxMrad / source.xMrad) * Math.min(1, alphaMaxMrad / source.yMrad),
+    unit: '1',
+    source: 'engine:reading',
+  });
+}
+
+/** T_2 of the source. */
+export function writeT2(writer: StepWriter, ruleSet: RuleSet, { point }: LimitSituation): void {
+  const { T2 } = ruleSet.factors.symbols;
+  const source = point.band.alphaMax[0]?.source ?? 'engine:reading';
+  const draft = { symbol: T2, what: 'Break time of the source', unit: 's', source };
+  if (!isExtended(point.source)) {
+    writer.write({ ...draft, formula: '10', value: 10 });
+    return;
+  }
+  writer.write({
+    symbol: 'alpha_m',
+    what: 'Mean angle of the source, each axis inside [alpha_min, 100 mrad]',
+    formula: '(min(max(alpha_x,alpha_min),100)+min(max(alpha_y,alpha_min),100))/2',
+    value: meanInside(point.source, T2_LARGEST_MRAD),
+    unit: 'mrad',
+    source: 'engine:reading',
+  });
+  writer.write({
+    ...draft,
+    formula: '10*10^((alpha_m-alpha_min)/98.5)',
+    value: breakTimeT2(point.source),
+  });
+}
+
+/** `200*t^0.5`, from the same row as the number. */
+export function printDurationRow({ coefficient, timeExponent }: DurationRow): string {
+  return timeExponent === undefined ? `${coefficient}` : `${coefficient}*t^${timeExponent}`;
+}

@@ -88,7 +88,10 @@ function allowedBy(issue: z.core.$ZodIssue): string | undefined {
   switch (issue.code) {
     case 'too_small':
     case 'too_big':
-      return rangeWords(issue);
+      // "At least one character" says no more than that something is missing.
+      return COUNTED[issue.origin] && issue.code === 'too_small' && issue.minimum === 1
+        ? undefined
+        : rangeWords(issue);
     case 'invalid_value':
       return listWords(issue.values);
     case 'not_multiple_of':

@@ -110,9 +110,7 @@ function parseInput(route: Route, req: Request): ParsedInput {
   if (parsedParams?.success === false) throw new NotFound();
   const errors = [...unstorableTexts(req.query), ...unstorableTexts(req.body)];
   if (errors.length > 0) throw new InvalidInput(errors);
-  const parsedQuery = query
-    ? parse(query, req.query)
-    : { value: undefined, errors: unknownQuery(req) };
+  const parsedQuery = parseQuery(query, req.query);
   const parsedBody = body
     ? parse(body, req.body ?? {})
     : { value: undefined, errors: unknownBody(route, req) };
@@ -132,8 +130,14 @@ function parse(schema: z.ZodType, value: unknown) {
     : { value: undefined, errors: fieldErrors(parsed.error) };
 }
 
-function unknownQuery(req: Request) {
-  return Object.keys(req.query).map((path) => ({ path, message: `${path} is not known here.` }));
+function parseQuery(schema: z.ZodType | undefined, query: Request['query']) {
+  const given = Object.entries(query);
+  const twice = given.filter(([, value]) => Array.isArray(value));
+  const unexpected = schema ? twice : given;
+  if (unexpected.length === 0 && schema) return parse(schema, query);
+  const words = schema ? 'is given more than once; give it once' : 'is not known here';
+  const errors = unexpected.map(([path]) => ({ path, message: `${path} ${words}.` }));
+  return { value: undefined, errors };
 }
 
 function unknownBody(route: Route, req: Request) {
@@ -167,7 +171,8 @@ async function provePresence(
 
 function visitOf({ gate, csrf }: Server, req: Request, res: Response): Visit {
   return {
-    sidHash: hashOfSid(req.sessionID),
+    // Routes outside /api have no session.
+    sidHash: hashOfSid(req.sessionID ?? ''),
     check: (credentials) => gate.check(req, res, credentials),
     begin: async (personId) => {
       await gate.begin(req, personId);

@@ -1,0 +1,135 @@
+import {
+  ChangeDetectionStrategy,
+  Component,
+  computed,
+  ElementRef,
+  inject,
+  input,
+  linkedSignal,
+  output,
+  signal,
+  viewChild,
+} from '@angular/core';
+import { MatButton } from '@angular/material/button';
+import type { Evaluation, EvaluationTransition } from '@shared/model/evaluations';
+import type { OfferedEvent } from '@shared/model/lasers';
+import type { Problem } from '@shared/model/problem';
+
+import { ConfirmDialog } from '../../../ui/confirm-dialog/confirm-dialog';
+import { Icon } from '../../../ui/icon/icon';
+import { PasswordPrompt } from '../../../ui/password-prompt/password-prompt';
+
+const TITLES: Readonly<Record<string, string>> = {
+  'send-to-check': 'Send to check',
+  confirm: 'Check this evaluation',
+  sign: 'Sign this evaluation',
+  'confirm-unchanged': 'Confirm it unchanged',
+  withdraw: 'Withdraw as wrong',
+};
+
+/** What can be done with an evaluation now, by whom, and why not by oneself. */
+@Component({
+  selector: 'lm-steps-panel',
+  imports: [Icon, MatButton, PasswordPrompt],
+  templateUrl: './steps-panel.html',
+  styleUrl: './steps-panel.scss',
+  host: { tabindex: '-1' },
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class StepsPanel {
+  private readonly host = inject<ElementRef<HTMLElement>>(ElementRef);
+  private readonly confirm = inject(ConfirmDialog);
+
+  readonly evaluation = input.required<Evaluation>();
+  /** What must be mended on this page before any step: an input that is not valid. */
+  readonly obstacle = input('');
+  readonly busy = input(false);
+  readonly problem = input<Problem | null>(null);
+
+  readonly stepped = output<EvaluationTransition>();
+
+  protected readonly commentBox = viewChild<ElementRef<HTMLInputElement>>('commentBox');
+  protected readonly reasonBox = viewChild<ElementRef<HTMLTextAreaElement>>('reasonBox');
+
+  /** The event chosen among those that are signed; the first of them until another is. */
+  protected readonly chosen = linkedSignal<OfferedEvent | undefined>(() =>
+    this.evaluation().offered.find((offer) => isSigned(offer) && !offer.asks.includes('reason')),
+  );
+  protected readonly missingReason = signal(false);
+  protected readonly others = computed(() =>
+    this.evaluation().offered.filter(
+      (offer) => offer !== this.chosen() && offer.event !== 'input-changed',
+    ),
+  );
+  protected readonly people = computed(() => {
+    const { author, checker, approver } = this.evaluation();
+    return [
+      `Author ${author.name}`,
+      ...(checker ? [`checked by ${checker.name}`] : []),
+      ...(approver ? [`signed by ${approver.name}`] : []),
+    ].join(' · ');
+  });
+  protected readonly title = computed(() => {
+    const event = this.chosen()?.event ?? this.others()[0]?.event ?? '';
+    return TITLES[event] ?? 'Next step';
+  });
+  protected readonly reasons = computed(() => {
+    const reasons = this.chosen()?.reasons ?? [];
+    return this.obstacle() ? [this.obstacle(), ...reasons] : reasons;
+  });
+  protected readonly working = computed(() =>
+    this.chosen()?.event === 'confirm' ? 'Confirming…' : 'Signing…',
+  );
+
+  focus(): void {
+    this.host.nativeElement.scrollIntoView({ block: 'center' });
+    this.host.nativeElement.focus({ preventScroll: true });
+  }
+
+  /** Begins a step that needs no signature, asking for its reason where one is kept. */
+  begin(offer: OfferedEvent): void {
+    if (isSigned(offer)) {
+      this.chosen.set(offer);
+      this.focus();
+      return;
+    }
+    const event = offer.event as EvaluationTransition['event'];
+    if (!offer.asks.includes('reason')) {
+      this.stepped.emit({ event });
+      return;
+    }
+    this.confirm
+      .ask({
+        title: offer.label,
+        text:
+          event === 'discard'
+            ? 'A discarded evaluation stays readable and cannot be taken up again.'
+            : 'The author sees the reason beside the evaluation.',
+        action: offer.label,
+        reason: { label: 'Reason, kept with the record', minLength: 10 },
+      })
+      .subscribe((answer) => {
+        if (answer) this.stepped.emit({ event, reason: answer.reason });
+      });
+  }
+
+  protected sign(password: string, comment: string, reason: HTMLTextAreaElement | undefined): void {
+    const offer = this.chosen();
+    if (!offer) return;
+    this.missingReason.set(reason !== undefined && reason.value.trim().length < 10);
+    if (this.missingReason()) {
+      reason?.focus();
+      return;
+    }
+    this.stepped.emit({
+      event: offer.event as EvaluationTransition['event'],
+      password,
+      ...(comment.trim() ? { comment: comment.trim() } : {}),
+      ...(reason ? { reason: reason.value.trim() } : {}),
+    });
+  }
+}
+
+function isSigned(offer: OfferedEvent): boolean {
+  return offer.asks.includes('password');
+}

@@ -17,6 +17,9 @@ const NONCE_PLACEHOLDER = /__CSP_NONCE__/g;
 
 /** Serves the built client: its files, and its page for every address that is a screen. */
 export function serveWebClient(app: Express, folder: string): void {
+  // The page only ever goes out with its nonce and its policy.
+  const home = page(join(folder, 'index.html'));
+  app.all('/index.html', home);
   app.use(compressed(folder));
   app.use(
     express.static(folder, {
@@ -25,13 +28,13 @@ export function serveWebClient(app: Express, folder: string): void {
       setHeaders: (res, path) => res.setHeader('Cache-Control', cacheControl(path)),
     }),
   );
-  app.all('/{*path}', page(join(folder, 'index.html')));
+  app.all('/{*path}', home);
 }
 
 function page(indexFile: string): RequestHandler {
   const html = existsSync(indexFile) ? withNonces(readFileSync(indexFile, 'utf8')) : undefined;
   return (req, res) => {
-    if (req.path.includes('.')) throw new NotFound('file');
+    if (req.path.includes('.') && req.path !== '/index.html') throw new NotFound('file');
     if (req.method !== 'GET' && req.method !== 'HEAD') {
       throw new MethodNotAllowed(req.method, ['GET', 'HEAD']);
     }

@@ -52,10 +52,13 @@ describe.each(MUTATING_ROUTES.map((route) => [titleOf(route), route] as const))(
       ['the origin null', { Origin: 'null' }],
       ['a cross-site fetch', { Origin: own, 'Sec-Fetch-Site': 'cross-site' }],
       ['a same-site fetch from another host', { 'Sec-Fetch-Site': 'same-site' }],
-      ['a foreign origin that claims to be same-origin', {
-        Origin: 'https://elsewhere.example',
-        'Sec-Fetch-Site': 'same-origin',
-      }],
+      [
+        'a foreign origin that claims to be same-origin',
+        {
+          Origin: 'https://elsewhere.example',
+          'Sec-Fetch-Site': 'same-origin',
+        },
+      ],
     ])('with its token but %s', async (_name, headers: Record<string, string>) => {
       const client = await clientFor(someRoleFor(route));
       const { answer } = await attempt({ ...headers, 'X-XSRF-TOKEN': client.csrfToken ?? '' });

@@ -34,9 +34,12 @@ describe('headers', () => {
     async (_title, route) => {
       const visitor = await app.visitor();
       for (const client of [lso, visitor]) {
-        const answer = await client.bare(route.method, somePath(route)).set('Origin', 'https://evil.example');
+        const answer = await client
+          .bare(route.method, somePath(route))
+          .set('Origin', 'https://evil.example');
         expectSafe(answer);
-        if (route.path.startsWith('/api/')) expect(answer.headers['cache-control']).toBe('no-store');
+        if (route.path.startsWith('/api/'))
+          expect(answer.headers['cache-control']).toBe('no-store');
         if (answer.status >= 400) expect(answer.type).toBe('application/problem+json');
       }
     },
@@ -71,7 +74,9 @@ describe('headers', () => {
     const { port } = app.server.address() as { port: number };
     const { request } = await import('node:http');
     const status = await new Promise<number>((resolve) => {
-      request({ port, method: 'TRACE', path: '/api/areas' }, (res) => resolve(res.statusCode ?? 0)).end();
+      request({ port, method: 'TRACE', path: '/api/areas' }, (res) =>
+        resolve(res.statusCode ?? 0),
+      ).end();
     });
     expect(status).toBe(405);
   });

@@ -52,7 +52,10 @@ describe('bad input', () => {
 
   it('refuses text that could not be stored and read back the same', async () => {
     for (const name of ['half \uD83D pair', 'nul \0 inside']) {
-      const answer = await lso.post('/api/areas').type('json').send(JSON.stringify({ ...AREA, name }));
+      const answer = await lso
+        .post('/api/areas')
+        .type('json')
+        .send(JSON.stringify({ ...AREA, name }));
       expect(answer.status).toBe(400);
       expect(answer.body.errors[0].path).toBe('name');
     }
@@ -79,9 +82,16 @@ describe('bad input', () => {
   });
 
   it('refuses a body in another character set or coding', async () => {
-    const latin = await lso.post('/api/areas').set('Content-Type', 'application/json; charset=latin1').send('{}');
+    const latin = await lso
+      .post('/api/areas')
+      .set('Content-Type', 'application/json; charset=latin1')
+      .send('{}');
     expect(latin.status).toBe(415);
-    const coded = await lso.post('/api/areas').type('json').set('Content-Encoding', 'zip').send('{}');
+    const coded = await lso
+      .post('/api/areas')
+      .type('json')
+      .set('Content-Encoding', 'zip')
+      .send('{}');
     expect(coded.status).toBe(415);
   });
 

@@ -52,7 +52,12 @@ describe('the list of routes', () => {
     // `app.all` mounts the refusals: 405 per path, 404 for the rest of /api, and the page.
     const served = mounted.filter((title) => !/^(_ALL|ACL|BIND|CHECKOUT|CONNECT)/.test(title));
     const declared = new Set(ROUTES.map(titleOf));
-    const paths = new Set<string>([...ROUTES.map((route) => route.path), '/api{/*path}', '/{*path}']);
+    const paths = new Set<string>([
+      ...ROUTES.map((route) => route.path),
+      '/api{/*path}',
+      '/index.html',
+      '/{*path}',
+    ]);
     for (const title of served) {
       const path = title.slice(title.indexOf(' ') + 1);
       expect(declared.has(title) || paths.has(path), title).toBe(true);
@@ -136,13 +141,16 @@ describe('permissions', () => {
     },
   );
 
-  it.each(ROLES)('a person who is only %s is refused what the table does not grant', async (role) => {
-    const client: TestClient = await app.signIn(role satisfies TestPerson);
-    for (const route of guarded) {
-      const answer = await client.bare(route.method, somePath(route));
-      const granted = scopeOf(route.action, [role]) !== undefined;
-      expect(answer.body.name === 'not-allowed', titleOf(route)).toBe(!granted);
-      if (!granted) expect(answer.status).toBe(403);
-    }
-  });
+  it.each(ROLES)(
+    'a person who is only %s is refused what the table does not grant',
+    async (role) => {
+      const client: TestClient = await app.signIn(role satisfies TestPerson);
+      for (const route of guarded) {
+        const answer = await client.bare(route.method, somePath(route));
+        const granted = scopeOf(route.action, [role]) !== undefined;
+        expect(answer.body.name === 'not-allowed', titleOf(route)).toBe(!granted);
+        if (!granted) expect(answer.status).toBe(403);
+      }
+    },
+  );
 });

@@ -178,7 +178,10 @@ describe('cookies', () => {
 
   it('cannot be rebuilt from a copy of the database', async () => {
     const client = await app.signIn('lso');
-    const sid = decodeURIComponent(client.cookie('sid') ?? '').slice(2).split('.')[0] ?? '';
+    const sid =
+      decodeURIComponent(client.cookie('sid') ?? '')
+        .slice(2)
+        .split('.')[0] ?? '';
     expect(sid.length).toBeGreaterThanOrEqual(43);
     const db = new BetterSqlite(databaseFile(app.dataDir), { readonly: true });
     const dump = JSON.stringify(db.prepare('select * from sessions').all());

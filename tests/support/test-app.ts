@@ -133,7 +133,12 @@ async function recordSite(edges: Edges): Promise<Pick<TestApp, 'personIds' | 'ar
     const ids = personIds as Record<TestPerson, string>;
     const area = async (code: string, department: string, supervisorId: string) => {
       const place = { building: 'Main', room: code, department, supervisorId };
-      const { id } = await createArea(ctx, { code, name: `Lab ${code}`, wallDistanceM: 10, ...place });
+      const { id } = await createArea(ctx, {
+        code,
+        name: `Lab ${code}`,
+        wallDistanceM: 10,
+        ...place,
+      });
       return id;
     };
     return {
@@ -152,7 +157,14 @@ let passwordHash: Promise<string> | undefined;
 
 function actorOf(person: TestPerson, id: string): Actor {
   const [role, department] = PEOPLE[person];
-  return { id, name: nameOf(person), email: emailOf(person), department, roles: [role], areaIds: [] };
+  return {
+    id,
+    name: nameOf(person),
+    email: emailOf(person),
+    department,
+    roles: [role],
+    areaIds: [],
+  };
 }
 
 function nameOf(person: TestPerson): string {

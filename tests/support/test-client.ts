@@ -51,7 +51,8 @@ export class TestClient {
     path: string,
     { body, version }: { body?: object | undefined; version?: number | undefined },
   ): Test {
-    const test = this.#agent[verb](path)
+    const test = this.#agent
+      [verb](path)
       .set('Origin', this.#origin)
       .set('X-XSRF-TOKEN', this.csrfToken ?? '');
     if (version !== undefined) test.set('If-Match', `"${version}"`);

@@ -11,11 +11,16 @@ import type { Edges } from './context/context';
 import { ACCOUNT_ROUTES } from './features/account/account-routes';
 import { apiDescriptionRoutes } from './features/api-description/api-description-routes';
 import { AREAS_ROUTES } from './features/areas/areas-routes';
+import { EVALUATE_ROUTES } from './features/evaluate/evaluate-routes';
+import { AGEING } from './features/evaluations/evaluation-jobs';
+import { EVALUATIONS_ROUTES } from './features/evaluations/evaluations-routes';
 import { HEALTH_ROUTES } from './features/health/health-routes';
+import { LASERS_ROUTES } from './features/lasers/lasers-routes';
 import { PEOPLE_ROUTES } from './features/people/people-routes';
 import { RECORDS_ROUTES } from './features/records/records-routes';
 import { SESSION_ROUTES } from './features/session/session-routes';
 import { SETTINGS_ROUTES } from './features/settings/settings-routes';
+import { TODAY_ROUTES } from './features/today/today-routes';
 import { createCsrfGuard } from './http/csrf-guard';
 import { inMatchingOrder, mountRoutes } from './http/mount-routes';
 import { problemDetails } from './http/problem-details';
@@ -35,6 +40,10 @@ export const ROUTES: readonly Route[] = withDescription([
   ...AREAS_ROUTES,
   ...SETTINGS_ROUTES,
   ...RECORDS_ROUTES,
+  ...LASERS_ROUTES,
+  ...EVALUATIONS_ROUTES,
+  ...EVALUATE_ROUTES,
+  ...TODAY_ROUTES,
 ]);
 
 export interface App {
@@ -72,6 +81,7 @@ export function createApp(edges: Edges, secret: Buffer): App {
         await purgeAttempts(edges);
       },
     },
+    AGEING,
   ];
   return { http, jobs: createJobRunner(edges, housekeeping) };
 }

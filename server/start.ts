@@ -13,6 +13,7 @@ import type { Config } from './config/config';
 import type { Edges } from './context/context';
 import { migrate } from './db/migrate';
 import { databaseFile, type Db, openDatabase } from './db/open-database';
+import { areaChanged } from './features/evaluations/evaluation-staleness-service';
 import { openFileStore } from './files/file-store';
 
 /** Entries of the audit trail that every start checks. */
@@ -59,7 +60,7 @@ export async function openEdges(
     log,
     files: openFileStore(join(config.dataDir, 'files')),
     heads: openTrailHeads(config.dataDir),
-    consequences: { areaChanged: () => Promise.resolve() },
+    consequences: { areaChanged },
   };
 }
 

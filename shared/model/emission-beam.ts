@@ -1,7 +1,12 @@
 import type { Beam, Emission as BeamEmission, Path, PerAxis } from '../hazard/case';
+import {
+  fullFromHalfAngle,
+  oneOverE2FromFwhm,
+  pulseEnergyFromMeanPower,
+} from '../hazard/convert-beam';
+import { figure } from '../text/figure';
 import type { Emission, Quantity } from './lasers';
 import type { FieldError } from './problem';
-import { figure } from '../text/figure';
 
 /** A line as the engine takes it, with every step from the data sheet told in a sentence. */
 export type BeamOf =
@@ -20,11 +25,6 @@ interface Notes {
   readonly assumptions: string[];
   readonly errors: FieldError[];
 }
-
-/** Gaussian: the 1/e² width of a full width at half maximum, √(2 / ln 2). */
-const E2_PER_FWHM = Math.sqrt(2 / Math.LN2);
-/** Gaussian: the 1/e² width of a 1/e width. */
-const E2_PER_E = Math.SQRT2;
 
 /**
  * The engine's beam for one line of a laser: the maximum is evaluated, the operating value is only
@@ -199,7 +199,7 @@ function pulseEnergyOf(
   const ways: { energyJ: number; conversion?: string }[] = [];
   if (emission.pulseEnergyJ) ways.push({ energyJ: emission.pulseEnergyJ.value });
   if (emission.powerW && meanRateHz) {
-    const energyJ = emission.powerW.value / meanRateHz;
+    const energyJ = pulseEnergyFromMeanPower(emission.powerW.value, meanRateHz).value;
     const conversion =
       `Pulse energy ${figure(energyJ, 'J')}: the mean power ${figure(emission.powerW.value, 'W')} ` +
       `divided by ${figure(meanRateHz, 'Hz')}.`;
@@ -309,7 +309,7 @@ export function diffractionLimitMrad(wavelengthNm: number, diameterMm: number): 
 
 function fullAngle(value: PerAxis, emission: Emission, notes: Notes): PerAxis {
   if (emission.divergenceAngle === 'full') return value;
-  const full = map(value, (half) => 2 * half);
+  const full = map(value, (half) => fullFromHalfAngle(half).value);
   notes.conversions.push(
     `Divergence: the half angle ${say(value, 'mrad')} is the full angle ${say(full, 'mrad')}.`,
   );
@@ -326,14 +326,21 @@ function widthAt1e2(
   const convention =
     which === 'diameter' ? emission.diameterConvention : emission.divergenceConvention;
   if (emission.profile === 'top-hat' || convention === '1/e2') return value;
-  const factor = convention === 'fwhm' ? E2_PER_FWHM : E2_PER_E;
+  const isFwhm = convention === 'fwhm';
   const unit = which === 'diameter' ? 'mm' : 'mrad';
-  const at1e2 = map(value, (width) => width * factor);
-  const from = convention === 'fwhm' ? 'FWHM' : '1/e';
+  const at1e2 = map(value, isFwhm ? (width) => oneOverE2FromFwhm(width).value : oneOverE2FromOneOverE);
+  const what = which === 'diameter' ? 'Diameter' : 'Divergence';
+  const how = isFwhm ? 'at half maximum (FWHM)' : 'at 1/e';
+  const factor = isFwhm ? '1.699' : '1.414';
   notes.conversions.push(
-    `${which === 'diameter' ? 'Diameter' : 'Divergence'}: ${say(value, unit)} at ${from} is ${say(at1e2, unit)} at 1/e² (Gaussian, times ${factor.toFixed(3)}).`,
+    `${what}: ${say(value, unit)} ${how} is ${say(at1e2, unit)} at 1/e² (Gaussian, times ${factor}).`,
   );
   return at1e2;
+}
+
+/** The 1/e² width of a Gaussian from its 1/e width. */
+function oneOverE2FromOneOverE(width: number): number {
+  return width * Math.SQRT2;
 }
 
 function mentionOperatingPower(emission: Emission, notes: Notes): void {

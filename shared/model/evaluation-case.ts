@@ -1,5 +1,5 @@
 import type { Beam, HazardCase, Path } from '../hazard/case';
-import { evaluate } from '../hazard/evaluate';
+import { evaluate, type EvaluateOptions } from '../hazard/evaluate';
 import type { EvaluationResult } from '../hazard/result';
 import { ruleSetById, type RuleSetId } from '../hazard/rule-sets';
 import { figure } from '../text/figure';
@@ -86,6 +86,7 @@ export function scenarioCase(
 export function evaluateScenarios(
   inputs: LaserInputs,
   input: Pick<EvaluationInput, 'ruleSet' | 'scenarios'>,
+  options: EvaluateOptions = {},
 ): ScenarioResult[] {
   return input.scenarios.map((scenario, index) => {
     const built = scenarioCase(inputs, scenario, input.ruleSet);
@@ -95,7 +96,7 @@ export function evaluateScenarios(
       return { scenarioId: scenario.id, case: null, result: { errors }, ...none };
     }
     const { conversions, assumptions } = built;
-    const result = evaluate(built.case);
+    const result = evaluate(built.case, options);
     return { scenarioId: scenario.id, case: built.case, result, conversions, assumptions };
   });
 }

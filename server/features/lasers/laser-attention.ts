@@ -1,3 +1,4 @@
+import type { TodayItem } from '@shared/model/today';
 import { dateWords, daysBetween, type LocalDate } from '@shared/model/local-date';
 
 import type { LaserRecord } from './laser-record';
@@ -7,9 +8,11 @@ type Facts = Pick<
   'state' | 'standing' | 'reviewOn' | 'waiver' | 'quarantine' | 'input'
 >;
 
-interface Attention {
+export interface Attention {
   readonly rank: number;
   readonly words: string;
+  /** As the list of today calls it; absent where nobody has to act on it today. */
+  readonly kind?: TodayItem['kind'];
 }
 
 /** A laser that nothing waits for. */
@@ -22,26 +25,27 @@ const AHEAD_DAYS = 60;
 export function attentionOf(laser: Facts, today: LocalDate): Attention[] {
   const { state, standing } = laser;
   const found: Attention[] = [];
-  const add = (rank: number, words: string) => found.push({ rank, words });
+  const add = (rank: number, words: string, kind?: TodayItem['kind']) =>
+    found.push({ rank, words, ...(kind ? { kind } : {}) });
   if (IS_GONE.has(state)) return [];
-  if (state === 'blocked') add(1, 'Blocked');
-  if (standing === 'stale') add(2, 'Evaluation stale');
+  if (state === 'blocked') add(1, 'Blocked', 'blocked');
+  if (standing === 'stale') add(2, 'Evaluation stale', 'stale');
   if (state === 'change-open') add(3, 'Change open');
-  if (state === 'in-use' && (standing === 'none' || standing === 'open')) add(4, 'Not evaluated');
+  if (state === 'in-use' && (standing === 'none' || standing === 'open')) add(4, 'Not evaluated', 'not-evaluated');
   if (laser.waiver && !WAIVER_RESTS.has(state)) {
     const { untilOn } = laser.waiver;
     const left = daysBetween(today, untilOn);
-    if (left < 0) add(5, `Waiver ended ${dateWords(untilOn)}`);
-    else if (left <= AHEAD_DAYS) add(6, `Waiver ends ${dateWords(untilOn)}`);
+    if (left < 0) add(5, `Waiver ended ${dateWords(untilOn)}`, 'waiver-ends');
+    else if (left <= AHEAD_DAYS) add(6, `Waiver ends ${dateWords(untilOn)}`, 'waiver-ends');
   }
   if (state === 'service-open') add(7, 'Service open');
   if (state === 'received' && laser.quarantine) add(8, 'Quarantine');
-  if (state === 'registered') add(9, 'Waits for the check of the LSO');
-  if (state === 'under-evaluation' && standing === 'none') add(10, 'Waits for an evaluation');
+  if (state === 'registered') add(9, 'Waits for the check of the LSO', 'laser-check');
+  if (state === 'under-evaluation' && standing === 'none') add(10, 'Waits for an evaluation', 'not-evaluated');
   if (state === 'under-evaluation' && standing === 'open') add(11, 'Evaluation in work');
   if (laser.reviewOn && standing === 'approved') {
     const left = daysBetween(today, laser.reviewOn);
-    if (left <= AHEAD_DAYS) add(12, `Review due ${dateWords(laser.reviewOn)}`);
+    if (left <= AHEAD_DAYS) add(12, `Review due ${dateWords(laser.reviewOn)}`, 'review-due');
   }
   if (laser.input.notSeenSince) add(13, `Not seen since ${dateWords(laser.input.notSeenSince)}`);
   return found.sort((a, b) => a.rank - b.rank);

@@ -98,7 +98,7 @@ function recordFile(
 /** The last part of the name, without what would mislead a reader about its order or kind. */
 function shownName(name: string): string {
   const last = name.split(/[\\/]/).at(-1) ?? '';
-  const clean = last.toWellFormed().replaceAll(/\p{C}/gu, '').trim();
+  const clean = last.replaceAll(/\p{C}/gu, '').trim();
   if (clean.length <= 120) return clean || 'file';
   const dot = clean.lastIndexOf('.');
   const ending = dot > 0 ? clean.slice(dot) : '';

@@ -19,6 +19,7 @@ import { newId } from '../../db/new-id';
 import { Conflict, InvalidInput } from '../../http/errors';
 import { requireVersion } from '../../http/etag';
 import { evaluationsFollowInputs } from '../evaluations/evaluation-staleness-service';
+import { type Attention, attentionOf } from './laser-attention';
 import { LASER_WORKFLOW } from './laser-life-cycle';
 import { eachLaser, findBySerial, listLasers } from './laser-queries';
 import {
@@ -54,6 +55,21 @@ export async function readLasers(ctx: Context, query: LaserListQuery): Promise<L
 export function eachLaserInReach(ctx: Context, filter: LaserFilter): AsyncGenerator<LaserRecord> {
   return eachLaser(ctx.tx, reachOf(ctx, 'laser.read'), filter);
 }
+
+/** Lasers that the person answers for and that something waits for, worst first. */
+export async function readAttention(
+  ctx: Context,
+  limit: number,
+): Promise<{ laser: LaserRecord; attention: Attention[] }[]> {
+  const answers = ctx.actor.roles.some((role) => ANSWERING.has(role));
+  if (!answers) return [];
+  const query = { attention: 'any', sort: 'attention', order: 'asc', limit } as const;
+  const page = await listLasers(ctx.tx, reachOf(ctx, 'laser.update'), query);
+  const today = await siteToday(ctx);
+  return page.rows.map((laser) => ({ laser, attention: attentionOf(laser, today) }));
+}
+
+const ANSWERING: ReadonlySet<string> = new Set(['lso', 'deputy-lso', 'laser-supervisor']);
 
 export async function readLaser(ctx: Context, id: string): Promise<Laser> {
   return laserView(ctx, await requireReadable(ctx, id));

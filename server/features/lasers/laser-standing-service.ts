@@ -14,8 +14,12 @@ import type { LaserSubject } from './laser-life-cycle';
 import { inputsOf, type LaserRecord } from './laser-record';
 import { findLaser, type LaserStanding, updateLaserStanding } from './laser-repository';
 import { countPhotos, findSealedEvaluation, hasOpenEvaluation } from './laser-evaluation-queries';
+import { allLaserIds, laserIdsOfArea } from './laser-queries';
+
+export { inputsOf, type LaserRecord, placementOf } from './laser-record';
 
 type Reading = Pick<Context, 'tx'>;
+type Dated = Pick<Context, 'tx' | 'now'>;
 
 /** The laser with this id, whatever its place; 404 when there is none. */
 export async function requireLaser(ctx: Reading, id: string): Promise<LaserRecord> {
@@ -30,14 +34,14 @@ export function hashOfInputs(laser: Pick<LaserRecord, 'input' | 'area'>): string
 }
 
 /** Today at the site. */
-export async function siteToday(ctx: Reading & Pick<Context, 'now'>): Promise<LocalDate> {
+export async function siteToday(ctx: Dated): Promise<LocalDate> {
   const { zone } = await readSettings(ctx);
   return localDateAt(ctx.now, zone);
 }
 
 /** The laser with the facts that its guards look at. */
 export async function laserSubject(
-  ctx: Reading & Pick<Context, 'now'>,
+  ctx: Dated,
   laser: LaserRecord,
 ): Promise<LaserSubject> {
   const sealed = await findSealedEvaluation(ctx.tx, laser.id);
@@ -52,7 +56,7 @@ export async function laserSubject(
 }
 
 /** Writes what follows for the laser from its evaluations and from the date: reach, attention. */
-export async function refreshStanding(ctx: Context, laserId: string): Promise<void> {
+export async function refreshStanding(ctx: Dated, laserId: string): Promise<void> {
   const laser = await requireLaser(ctx, laserId);
   const standing = await standingOf(ctx, laser);
   const today = await siteToday(ctx);
@@ -62,8 +66,18 @@ export async function refreshStanding(ctx: Context, laserId: string): Promise<vo
   });
 }
 
+/** Ids of all lasers, those that left included. */
+export async function everyLaserId(ctx: Reading): Promise<string[]> {
+  return (await allLaserIds(ctx.tx)).map(({ id }) => id);
+}
+
+/** Ids of the lasers in an area. */
+export async function laserIdsIn(ctx: Reading, areaId: string): Promise<string[]> {
+  return (await laserIdsOfArea(ctx.tx, areaId)).map(({ id }) => id);
+}
+
 async function standingOf(
-  ctx: Context,
+  ctx: Reading,
   laser: LaserRecord,
 ): Promise<Omit<LaserStanding, 'attentionRank'>> {
   const sealed = await findSealedEvaluation(ctx.tx, laser.id);

@@ -10,7 +10,7 @@ const axes = z.union([
 ]);
 
 /** The path of the beam to the person, as the engine takes it. */
-export const pathSchema = z.discriminatedUnion('kind', [
+export const pathSchema = z.union([
   z.strictObject({ kind: z.literal('direct') }),
   z.strictObject({
     kind: z.literal('lens'),

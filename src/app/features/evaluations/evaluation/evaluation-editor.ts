@@ -16,7 +16,7 @@ import {
 } from '@angular/core';
 import { NonNullableFormBuilder, ReactiveFormsModule } from '@angular/forms';
 import { MatButton } from '@angular/material/button';
-import { RULE_SETS } from '@shared/hazard/rule-sets';
+import { RULE_SETS, type RuleSet } from '@shared/hazard/rule-sets';
 import { uncoveredLines } from '@shared/model/evaluation-case';
 import { ACTIVITIES, type Evaluation, type EvaluationTransition } from '@shared/model/evaluations';
 import type { Problem } from '@shared/model/problem';
@@ -93,7 +93,7 @@ export class EvaluationEditor {
 
   readonly steps = viewChild(StepsPanel);
 
-  protected readonly ruleSets = RULE_SETS;
+  protected readonly ruleSets: readonly RuleSet[] = RULE_SETS;
   protected readonly form = computed(() => evaluationForm(this.fb, this.evaluation()));
   protected readonly saver = computed(() =>
     runInInjectionContext(this.injector, () => new DraftSaver(this.evaluation())),

@@ -13,7 +13,7 @@ import { Router, RouterLink } from '@angular/router';
 import type { HazardCase } from '@shared/hazard/case';
 import { proposedExposure } from '@shared/hazard/default-exposure';
 import { evaluate } from '@shared/hazard/evaluate';
-import { RULE_SETS, ruleSetById } from '@shared/hazard/rule-sets';
+import { RULE_SETS, type RuleSet, ruleSetById } from '@shared/hazard/rule-sets';
 import { isEvaluated } from '@shared/model/evaluation-case';
 import { debounceTime, skip } from 'rxjs';
 
@@ -79,7 +79,7 @@ export class FreeBenchPage {
     if (text === undefined || text === this.written || readable(text)) return '';
     return 'The link holds no case that can be evaluated. Here is a first case instead.';
   });
-  protected readonly ruleSets = RULE_SETS;
+  protected readonly ruleSets: readonly RuleSet[] = RULE_SETS;
   protected readonly form = computed(() => caseForm(this.fb, this.linked()));
   protected readonly value = formSignal(this.form);
   protected readonly outcome = linkedSignal<unknown, Outcome>({

@@ -5,6 +5,7 @@ import type { FieldError, Problem } from '@shared/model/problem';
 import { catchError, EMPTY, finalize, map, type Observable } from 'rxjs';
 import type * as z from 'zod';
 
+import { contractWords } from '../../ui/field/contract-words';
 import { setServerErrors } from '../../ui/field/server-errors';
 import { asProblem, ProblemError } from '../http/problem-error';
 import { contractErrors } from './contract-errors';
@@ -34,13 +35,20 @@ export class RecordSave<Stored> {
   readonly stored = signal<Stored | null>(null);
 
   /** The form's value as the contract wants it; undefined when it does not fit, and why is shown. */
-  check<T>(form: AbstractControl, schema: z.ZodType<T>, value: unknown = form.value): T | undefined {
+  check<T>(
+    form: AbstractControl,
+    schema: z.ZodType<T>,
+    value: unknown = form.value,
+  ): T | undefined {
     forgetServerErrors(form);
     form.markAllAsTouched();
     this.problem.set(null);
     this.errors.set([]);
-    const parsed = schema.safeParse(filled(value) ?? {});
-    const found = [...formErrors(form), ...(parsed.success ? [] : contractErrors(parsed.error))];
+    const parsed = schema.safeParse(filled(value) ?? {}, { error: contractWords });
+    const found = [
+      ...formErrors(form),
+      ...(parsed.success ? [] : contractErrors(parsed.error)),
+    ].map(({ path, message }) => ({ path: controlPath(form, path), message }));
     const errors = found.filter(
       ({ path }, index) => found.findIndex((other) => other.path === path) === index,
     );
@@ -79,8 +87,9 @@ export class RecordSave<Stored> {
       );
     }
     const problem = asProblem(error);
-    setServerErrors(form, problem.errors ?? []);
-    this.problem.set(problem);
+    const errors = problem.errors?.map((one) => ({ ...one, path: controlPath(form, one.path) }));
+    setServerErrors(form, errors ?? []);
+    this.problem.set(errors ? { ...problem, errors } : problem);
     return EMPTY;
   }
 }
@@ -91,4 +100,10 @@ function forgetServerErrors(control: AbstractControl): void {
     Object.values(control.controls as Record<string, AbstractControl>).forEach(forgetServerErrors);
   }
   if (control.hasError('server')) control.updateValueAndValidity();
+}
+
+/** A group that holds a number and its source shows its errors at the number. */
+function controlPath(form: AbstractControl, path: string): string {
+  const control = form.get(path.replace(/\[(\d+)\]/g, '.$1'));
+  return control instanceof FormGroup && control.get('value') ? `${path}.value` : path;
 }

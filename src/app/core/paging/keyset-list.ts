@@ -1,4 +1,11 @@
-import { computed, inject, Injectable, type Signal, signal, type WritableSignal } from '@angular/core';
+import {
+  computed,
+  inject,
+  Injectable,
+  type Signal,
+  signal,
+  type WritableSignal,
+} from '@angular/core';
 import { takeUntilDestroyed, toObservable } from '@angular/core/rxjs-interop';
 import type { Problem } from '@shared/model/problem';
 import {

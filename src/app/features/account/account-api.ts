@@ -1,7 +1,12 @@
 import { HttpClient } from '@angular/common/http';
 import { inject, Injectable } from '@angular/core';
 import type { acceptInvitationSchema } from '@shared/model/people';
-import { type changePasswordSchema, type Session, sessionSchema, type setupSchema } from '@shared/model/session';
+import {
+  type changePasswordSchema,
+  type Session,
+  sessionSchema,
+  type setupSchema,
+} from '@shared/model/session';
 import { map, type Observable } from 'rxjs';
 import type * as z from 'zod';
 

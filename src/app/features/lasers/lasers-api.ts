@@ -1,6 +1,5 @@
 import { HttpClient, type HttpEvent, httpResource } from '@angular/common/http';
 import { inject, Injectable, type Signal } from '@angular/core';
-import { evaluationSchema } from '@shared/model/evaluations';
 import type { LaserFile } from '@shared/model/files';
 import {
   duplicatesSchema,
@@ -18,6 +17,7 @@ import { map, type Observable } from 'rxjs';
 import type * as z from 'zod';
 
 import { ifMatch, queryParams } from '../../core/http/api-request';
+import type { KeysetRange } from '../../core/paging/keyset-list';
 
 export type Duplicate = z.infer<typeof duplicatesSchema>['lasers'][number];
 export type HistoryPage = z.infer<typeof auditTrailPageSchema>;
@@ -56,9 +56,9 @@ export class LasersApi {
       .pipe(map((body) => laserSchema.parse(body)));
   }
 
-  history(id: string, after?: string): Observable<HistoryPage> {
+  history(id: string, range: KeysetRange): Observable<HistoryPage> {
     return this.http
-      .get(`/api/lasers/${id}/history`, { params: queryParams({ after, limit: 20 }) })
+      .get(`/api/lasers/${id}/history`, { params: queryParams(range) })
       .pipe(map((body) => auditTrailPageSchema.parse(body)));
   }
 
@@ -82,13 +82,6 @@ export class LasersApi {
 
   removeFile(id: string, fileId: string): Observable<void> {
     return this.http.delete<void>(`/api/lasers/${id}/files/${fileId}`);
-  }
-
-  /** A new draft for this laser; answers its id. */
-  beginEvaluation(laserId: string, fromId?: string): Observable<string> {
-    return this.http
-      .post('/api/evaluations', { laserId, ...(fromId && { fromId }) })
-      .pipe(map((body) => evaluationSchema.parse(body).id));
   }
 }
 

@@ -101,7 +101,10 @@ export class RecordsPage {
   protected readonly narrowed = computed(() => {
     const first = this.entries.rows()[0];
     const { actor, record } = this.filter();
-    return [actor && (first?.actorName ?? 'one person'), record && (first?.recordName ?? 'one record')]
+    return [
+      actor && (first?.actorName ?? 'one person'),
+      record && (first?.recordName ?? 'one record'),
+    ]
       .filter(Boolean)
       .join(', ');
   });

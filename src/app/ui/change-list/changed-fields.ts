@@ -31,7 +31,9 @@ function canonical(value: unknown): string {
   return (
     JSON.stringify(value, (_, part: unknown) => {
       if (!isRecord(part)) return part;
-      const entries = Object.entries(part).filter(([, item]) => item !== undefined && item !== null);
+      const entries = Object.entries(part).filter(
+        ([, item]) => item !== undefined && item !== null,
+      );
       return Object.fromEntries(entries.sort(([a], [b]) => (a < b ? -1 : 1)));
     }) ?? 'null'
   );

@@ -9,7 +9,8 @@ export function valueWords(value: unknown, path = ''): string {
   if (Array.isArray(value)) {
     return value.length ? value.map((item) => valueWords(item)).join('; ') : 'none';
   }
-  if (typeof value === 'object') return objectWords(value as Readonly<Record<string, unknown>>, path);
+  if (typeof value === 'object')
+    return objectWords(value as Readonly<Record<string, unknown>>, path);
   return String(value);
 }
 

@@ -1,4 +1,5 @@
 import {
+  type AfterContentChecked,
   booleanAttribute,
   ChangeDetectionStrategy,
   Component,
@@ -6,17 +7,15 @@ import {
   DestroyRef,
   inject,
   input,
-  type OnInit,
   signal,
-  type Signal,
 } from '@angular/core';
 import { takeUntilDestroyed } from '@angular/core/rxjs-interop';
-import { type ControlValueAccessor, NgControl, type ValidationErrors } from '@angular/forms';
+import { type AbstractControl, type ControlValueAccessor, NgControl } from '@angular/forms';
 import { MatAutocomplete, MatAutocompleteTrigger, MatOption } from '@angular/material/autocomplete';
 import { catchError, debounceTime, of, Subject, switchMap } from 'rxjs';
 
 import { Field } from '../field/field';
-import { errorText, shownErrors } from '../field/field-state';
+import { errorText, ShownErrors } from '../field/field-state';
 import { Icon } from '../icon/icon';
 import type { FindRecords, RecordOption } from './record-option';
 
@@ -28,9 +27,9 @@ import type { FindRecords, RecordOption } from './record-option';
   styleUrl: './record-picker.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
-export class RecordPicker implements ControlValueAccessor, OnInit {
+export class RecordPicker implements ControlValueAccessor, AfterContentChecked {
   private readonly ngControl = inject(NgControl, { self: true });
-  private readonly destroyRef = inject(DestroyRef);
+  private readonly shown = new ShownErrors(inject(DestroyRef));
 
   readonly label = input.required<string>();
   readonly path = input.required<string>();
@@ -47,7 +46,6 @@ export class RecordPicker implements ControlValueAccessor, OnInit {
   protected readonly options = signal<readonly RecordOption[]>([]);
   protected readonly isDisabled = signal(false);
   private readonly picked = signal<RecordOption | null>(null);
-  private readonly source = signal<Signal<ValidationErrors | null> | null>(null);
   private readonly typed = new Subject<string>();
   private report: (id: string) => void = () => undefined;
   private reportTouched: () => void = () => undefined;
@@ -56,7 +54,7 @@ export class RecordPicker implements ControlValueAccessor, OnInit {
     () => [this.picked(), this.chosen()].find((option) => option?.id === this.id()) ?? null,
   );
   protected readonly shownText = computed(() => this.text() ?? this.record()?.name ?? this.id());
-  protected readonly problem = computed(() => errorText(this.source()?.() ?? null, this.label()));
+  protected readonly problem = computed(() => errorText(this.shown.errors(), this.label()));
 
   constructor() {
     this.ngControl.valueAccessor = this;
@@ -69,13 +67,10 @@ export class RecordPicker implements ControlValueAccessor, OnInit {
       .subscribe((options) => this.options.set(options));
   }
 
-  ngOnInit(): void {
-    const control = this.ngControl.control;
-    if (!control) return;
-    control.addValidators(() =>
-      this.text() ? { unpicked: `Choose ${this.what()} from the list, or empty the field.` } : null,
-    );
-    this.source.set(shownErrors(control, this.destroyRef));
+  ngAfterContentChecked(): void {
+    const { control } = this.ngControl;
+    if (control && !control.hasValidator(this.isPicked)) control.addValidators(this.isPicked);
+    this.shown.follow(control);
   }
 
   writeValue(id: string | null): void {
@@ -121,6 +116,9 @@ export class RecordPicker implements ControlValueAccessor, OnInit {
   protected leave(): void {
     this.reportTouched();
   }
+
+  private readonly isPicked = (_control: AbstractControl) =>
+    this.text() ? { unpicked: `Choose ${this.what()} from the list, or empty the field.` } : null;
 
   protected readonly nameOf = (option: RecordOption | string | null): string =>
     typeof option === 'string' ? option : (option?.name ?? '');

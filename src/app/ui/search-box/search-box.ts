@@ -62,9 +62,7 @@ export class SearchBox {
   protected readonly entered = new Subject<string>();
   protected readonly id = `search-box-${++count}`;
 
-  readonly searched = outputFromObservable(
-    merge(this.typed.pipe(debounceTime(250)), this.entered),
-  );
+  readonly searched = outputFromObservable(merge(this.typed.pipe(debounceTime(250)), this.entered));
 
   focus(): void {
     this.box().nativeElement.focus();

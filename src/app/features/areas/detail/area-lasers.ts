@@ -1,4 +1,11 @@
-import { ChangeDetectionStrategy, Component, computed, inject, input, linkedSignal } from '@angular/core';
+import {
+  ChangeDetectionStrategy,
+  Component,
+  computed,
+  inject,
+  input,
+  linkedSignal,
+} from '@angular/core';
 import { MatButton } from '@angular/material/button';
 import { RouterLink } from '@angular/router';
 
@@ -38,7 +45,9 @@ export class AreaLasers {
 
   protected readonly lasers = new KeysetList({
     name: 'area-lasers',
-    query: computed(() => ({ areaId: this.areaId(), sort: 'eye-distance', order: 'desc' }) as const),
+    query: computed(
+      () => ({ areaId: this.areaId(), sort: 'eye-distance', order: 'desc' }) as const,
+    ),
     shown: linkedSignal({ source: this.areaId, computation: () => PAGE_ROWS }),
     load: (query, range) => this.api.list({ ...query, ...range }),
   });

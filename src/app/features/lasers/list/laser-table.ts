@@ -1,30 +1,21 @@
 import { ChangeDetectionStrategy, Component, computed, input, output } from '@angular/core';
 import { RouterLink } from '@angular/router';
 import type { LaserListQuery, LaserRow } from '@shared/model/lasers';
+import { formatOpticalDensity, formatQuantity } from '@shared/model/quantity-format';
 import { figure } from '@shared/text/figure';
 
 import { LineSwatch } from '../../../ui/line-swatch/line-swatch';
 import { ListTable } from '../../../ui/list-table/list-table';
 import { SortHead, type Sorting } from '../../../ui/list-table/sort-head';
-import { Quantity } from '../../../ui/quantity/quantity';
 import { ReachAxis } from '../../../ui/reach-strip/reach-axis';
 import { ReachStrip } from '../../../ui/reach-strip/reach-strip';
 import { StateChip } from '../../../ui/state-chip/state-chip';
-import { reachDistances } from '../laser-reach';
+import { reachDistances } from '../reach-distances';
 
 /** Lasers in rows, each with its reach under one axis. */
 @Component({
   selector: 'lm-laser-table',
-  imports: [
-    LineSwatch,
-    ListTable,
-    Quantity,
-    ReachAxis,
-    ReachStrip,
-    RouterLink,
-    SortHead,
-    StateChip,
-  ],
+  imports: [LineSwatch, ListTable, ReachAxis, ReachStrip, RouterLink, SortHead, StateChip],
   templateUrl: './laser-table.html',
   styleUrl: './laser-table.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -47,6 +38,9 @@ function viewOf(row: LaserRow) {
     name: `${row.maker} ${row.model}`,
     strip: reachDistances(reach, row.wallDistanceM),
     isNowhere: reach?.eyeDistanceM === 0,
+    // Plain text: a control for each number would make a list long to walk by Tab.
+    distance: reach && formatQuantity(reach.eyeDistanceM, 'm', 'up'),
+    density: reach ? formatOpticalDensity(reach.opticalDensity) : '–',
     duration: reach ? `at ${figure(reach.eyeS, 's')}` : '',
     summary: summaries.length > 2 ? `${summaries.length} emissions` : summaries.join('; '),
     class: row.verifiedClass ?? row.declaredClass,

@@ -10,7 +10,13 @@ import {
 import { NonNullableFormBuilder, ReactiveFormsModule } from '@angular/forms';
 import { MatButton } from '@angular/material/button';
 import { Router, RouterLink } from '@angular/router';
-import { type Person, type PersonInput, personInputSchema, ROLE_WORDS, ROLES } from '@shared/model/people';
+import {
+  type Person,
+  type PersonInput,
+  personInputSchema,
+  ROLE_WORDS,
+  ROLES,
+} from '@shared/model/people';
 import { scopeOf } from '@shared/permissions/permissions';
 import { map, type Observable } from 'rxjs';
 

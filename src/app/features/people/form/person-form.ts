@@ -1,5 +1,11 @@
 import type { NonNullableFormBuilder } from '@angular/forms';
-import { type Person, type PersonInput, personInputSchema, ROLES, type Role } from '@shared/model/people';
+import {
+  type Person,
+  type PersonInput,
+  personInputSchema,
+  ROLES,
+  type Role,
+} from '@shared/model/people';
 
 import { zodValidator } from '../../../ui/field/zod-validator';
 

@@ -53,6 +53,11 @@ export function metricsForWidth(width: number, gutter?: number): ReachMetrics {
   return { ...METRICS.phone, decade: Math.max(20, Math.min(decade, fitting)) };
 }
 
+/** The same strip when a chart below carries the axis. */
+export function withoutAxis(metrics: ReachMetrics): ReachMetrics {
+  return { ...metrics, axisText: 0, height: metrics.base + metrics.foot + 5 * metrics.px };
+}
+
 export function widthOf(metrics: ReachMetrics): number {
   return metrics.left + AXIS_DECADES * metrics.decade + metrics.right;
 }

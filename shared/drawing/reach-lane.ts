@@ -193,26 +193,20 @@ export function chevron(lane: Lane, metrics: ReachMetrics): Shape {
 }
 
 /** Name and distance where the lane has ended; left of the jamb when there is no room. */
-export function words(lane: Lane, metrics: ReachMetrics): Shape[] {
+export function words(lane: Lane, metrics: ReachMetrics, wallX: number | null): Shape[] {
   const { text: size, px } = metrics;
   if (size === 0) return [];
   const value = lane.beyondAxis ? '> 100\u202fkm' : formatQuantity(lane.distanceM, 'm', 'up').text;
   const width = textWidth(`${lane.word} ${value}`, size);
   const fits = !lane.beyondAxis && lane.x + 6 * px + width <= widthOf(metrics);
-  const y = lane.y + lane.height / 2 + size * 0.34;
   const x = fits ? lane.x + 6 * px : lane.x - 6 * px;
-  const ground: Shape = {
-    kind: 'rect',
-    x: x - width - 2 * px,
-    y: lane.y + 2 * px,
-    width: width + 4 * px,
-    height: lane.height - 3 * px,
-    fill: 'sheet',
-  };
+  const left = fits ? x : x - width;
+  const box = { x: left - 2 * px, y: lane.y + 2 * px, width: width + 4 * px };
+  const ground: Shape = { kind: 'rect', ...box, height: lane.height - 3 * px, fill: 'sheet' };
   const label: Shape = {
     kind: 'text',
     x,
-    y,
+    y: lane.y + lane.height / 2 + size * 0.34,
     size,
     anchor: fits ? 'start' : 'end',
     parts: [
@@ -221,7 +215,8 @@ export function words(lane: Lane, metrics: ReachMetrics): Shape[] {
     ],
     halo: 3 * px,
   };
-  return fits ? [label] : [ground, label];
+  const isCrossed = wallX !== null && wallX > box.x && wallX < box.x + box.width;
+  return fits && !isCrossed ? [label] : [ground, label];
 }
 
 export function polygon(points: readonly (readonly number[])[]): string {

@@ -56,11 +56,11 @@ export function reachStrip(reach: Reach, metrics: ReachMetrics): ReachStripDrawi
       sills.filter((lane) => lane.side === side).flatMap((lane) => sillShapes(lane, metrics)),
     ),
     ...lanes.filter((lane) => lane.beyondAxis).map((lane) => chevron(lane, metrics)),
-    ...(lanes.length === 0 ? closedSill(metrics) : []),
     aperture(metrics),
     ...wall.shapes,
     ...uncertainty(reach, metrics),
-    ...lanes.flatMap((lane) => words(lane, metrics)),
+    ...(lanes.length === 0 ? closedSill(metrics) : []),
+    ...lanes.flatMap((lane) => words(lane, metrics, wall.x)),
   ];
   return {
     width,
@@ -150,21 +150,34 @@ function sealedMark(reach: ReachDistances, metrics: ReachMetrics): Shape[] {
   ];
 }
 
+const NOWHERE = 'nowhere above the limit';
+
 /** Nowhere above the limit: a closed sill at the aperture, and words. */
 function closedSill(metrics: ReachMetrics): Shape[] {
   const { base: y, px, size, left } = metrics;
   const x = left + footPath(0, metrics).half + 2 * px;
   const top = y - (y - laneTop(metrics)) * 0.5;
+  const text = Math.max(13 * px, metrics.text);
+  const [textX, textY] = [x + 10 * px, y - (size === 'row' ? 3 : 8 * px)];
+  const length = textWidth(NOWHERE, text);
   return [
     { kind: 'path', d: linePath(x, top, x, y), stroke: 'spruce', strokeWidth: 2 * px },
     { kind: 'path', d: footPath(x, metrics).d, fill: 'spruce' },
     {
+      kind: 'rect',
+      x: textX - 3 * px,
+      y: textY - text,
+      width: length + 6 * px,
+      height: text + 3 * px,
+      fill: 'sheet',
+    },
+    {
       kind: 'text',
-      x: x + 10 * px,
-      y: y - (size === 'row' ? 3 : 8 * px),
-      size: Math.max(13 * px, metrics.text),
+      x: textX,
+      y: textY,
+      size: text,
       anchor: 'start',
-      parts: [{ text: 'nowhere above the limit', fill: 'ink2' }],
+      parts: [{ text: NOWHERE, fill: 'ink2' }],
     },
   ];
 }

@@ -20,6 +20,15 @@ export const APP_ROUTES: Routes = [
     path: 'sign-in',
     loadChildren: () => import('./features/sign-in/sign-in-routes').then((m) => m.SIGN_IN_ROUTES),
   },
+  {
+    path: 'set-up',
+    loadChildren: () => import('./features/account/set-up-routes').then((m) => m.SET_UP_ROUTES),
+  },
+  {
+    path: 'invitation',
+    loadChildren: () =>
+      import('./features/account/invitation-routes').then((m) => m.INVITATION_ROUTES),
+  },
   ...DEVELOPMENT_ROUTES,
   {
     path: '',
@@ -41,8 +50,17 @@ export const APP_ROUTES: Routes = [
           import('./features/evaluations/evaluations-routes').then((m) => m.EVALUATIONS_ROUTES),
       },
       {
+        path: 'bench',
+        loadChildren: () =>
+          import('./features/evaluations/free-bench-routes').then((m) => m.FREE_BENCH_ROUTES),
+      },
+      {
         path: 'areas',
         loadChildren: () => import('./features/areas/areas-routes').then((m) => m.AREAS_ROUTES),
+      },
+      {
+        path: 'people',
+        loadChildren: () => import('./features/people/people-routes').then((m) => m.PEOPLE_ROUTES),
       },
       {
         path: 'records',
@@ -53,6 +71,11 @@ export const APP_ROUTES: Routes = [
         path: 'settings',
         loadChildren: () =>
           import('./features/settings/settings-routes').then((m) => m.SETTINGS_ROUTES),
+      },
+      {
+        path: 'account',
+        loadChildren: () =>
+          import('./features/account/account-routes').then((m) => m.ACCOUNT_ROUTES),
       },
       {
         path: 'help',

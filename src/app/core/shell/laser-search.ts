@@ -3,6 +3,7 @@ import {
   Component,
   type ElementRef,
   inject,
+  output,
   viewChild,
 } from '@angular/core';
 import { Router } from '@angular/router';
@@ -38,6 +39,14 @@ export class LaserSearch {
   private readonly router = inject(Router);
   private readonly field = viewChild.required<ElementRef<HTMLInputElement>>('field');
 
+  /** The person pressed `/`. */
+  readonly summoned = output();
+
+  focus(): void {
+    this.field().nativeElement.focus();
+    this.field().nativeElement.select();
+  }
+
   protected search(event: Event): void {
     event.preventDefault();
     const q = this.field().nativeElement.value.trim();
@@ -48,8 +57,7 @@ export class LaserSearch {
     if (event.key !== '/' || event.ctrlKey || event.metaKey || event.altKey) return;
     if (isTyping(event.target)) return;
     event.preventDefault();
-    this.field().nativeElement.focus();
-    this.field().nativeElement.select();
+    this.summoned.emit();
   }
 }
 

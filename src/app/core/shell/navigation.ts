@@ -12,6 +12,7 @@ export const DESTINATIONS: readonly Destination[] = [
   { path: '/lasers', word: 'Lasers', icon: 'lasers' },
   { path: '/evaluations', word: 'Evaluations', icon: 'evaluations' },
   { path: '/areas', word: 'Areas', icon: 'areas' },
+  { path: '/people', word: 'People', icon: 'people' },
   { path: '/records', word: 'Records', icon: 'records' },
   { path: '/settings', word: 'Settings', icon: 'settings' },
 ];

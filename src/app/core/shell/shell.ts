@@ -47,10 +47,13 @@ export class Shell {
   protected readonly unhandled = inject(UnhandledProblem);
   protected readonly renewal = inject(SessionRenewal);
 
+  private readonly search = viewChild.required(LaserSearch);
   private readonly main = viewChild.required<ElementRef<HTMLElement>>('main');
 
   protected readonly destinations = [...DESTINATIONS, HELP];
   protected readonly menuOpen = signal(false);
+  /** On narrow screens, where the search is not always there. */
+  protected readonly searchOpen = signal(false);
 
   constructor() {
     // A new page starts reading at its content; a changed filter in the URL does not.
@@ -63,6 +66,11 @@ export class Shell {
       .subscribe((event) => this.afterNavigation(event));
   }
 
+  protected openSearch(): void {
+    this.searchOpen.set(true);
+    afterNextRender(() => this.search().focus(), { injector: this.injector });
+  }
+
   protected skipToContent(event: Event): void {
     event.preventDefault();
     this.main().nativeElement.focus();
@@ -72,6 +80,7 @@ export class Shell {
 
   private afterNavigation(event: NavigationEnd): void {
     this.menuOpen.set(false);
+    this.searchOpen.set(false);
     this.unhandled.dismiss();
     const path = pathOf(event.urlAfterRedirects);
     if (path === this.path) return;

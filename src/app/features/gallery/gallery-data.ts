@@ -36,9 +36,10 @@ export const REACHES: readonly { readonly name: string; readonly reach: Reach }[
 ];
 
 export const SWATCHES: readonly (readonly SwatchLine[])[] = [
-  ...[193, 248, 308, 355, 400, 405, 457.9, 488, 532, 561, 589, 632.8, 670, 700, 780, 1064, 1550, 4600, 10_600].map(
-    (wavelengthNm) => [{ wavelengthNm }],
-  ),
+  ...[
+    193, 248, 308, 355, 400, 405, 457.9, 488, 532, 561, 589, 632.8, 670, 700, 780, 1064, 1550, 4600,
+    10_600,
+  ].map((wavelengthNm) => [{ wavelengthNm }]),
   [{ wavelengthNm: 690, wavelengthToNm: 1040 }],
   [{ wavelengthNm: 410, wavelengthToNm: 710 }],
   [{ wavelengthNm: 1064 }, { wavelengthNm: 532 }, { wavelengthNm: 355 }],

@@ -1,16 +1,8 @@
-import {
-  computed,
-  DestroyRef,
-  Directive,
-  inject,
-  type OnInit,
-  signal,
-  type Signal,
-} from '@angular/core';
-import { NgControl, type ValidationErrors } from '@angular/forms';
+import { type AfterContentChecked, DestroyRef, Directive, inject } from '@angular/core';
+import { NgControl } from '@angular/forms';
 
 import { Field } from './field';
-import { shownErrors } from './field-state';
+import { ShownErrors } from './field-state';
 
 /** On an `input`, `select` or `textarea` inside `lm-field`: our look, its name and its errors. */
 @Directive({
@@ -22,20 +14,17 @@ import { shownErrors } from './field-state';
     '[attr.aria-invalid]': "field.error() ? 'true' : null",
   },
 })
-export class Control implements OnInit {
+export class Control implements AfterContentChecked {
   private readonly ngControl = inject(NgControl, { optional: true, self: true });
-  private readonly destroyRef = inject(DestroyRef);
-  private readonly source = signal<Signal<ValidationErrors | null> | null>(null);
+  private readonly shown = new ShownErrors(inject(DestroyRef));
   protected readonly field = inject(Field);
 
-  readonly errors = computed(() => this.source()?.() ?? null);
-
   constructor() {
-    this.field.attach(this.errors);
+    this.field.attach(this.shown.errors);
   }
 
-  ngOnInit(): void {
-    const control = this.ngControl?.control;
-    if (control) this.source.set(shownErrors(control, this.destroyRef));
+  // Not in ngOnInit: the form directive may set its control after that.
+  ngAfterContentChecked(): void {
+    this.shown.follow(this.ngControl?.control ?? null);
   }
 }

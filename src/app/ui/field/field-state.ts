@@ -1,6 +1,6 @@
-import { DestroyRef, type Signal, signal } from '@angular/core';
-import { takeUntilDestroyed } from '@angular/core/rxjs-interop';
+import { type DestroyRef, type Signal, signal } from '@angular/core';
 import type { AbstractControl, ValidationErrors } from '@angular/forms';
+import type { Subscription } from 'rxjs';
 
 /** The sentence for a control's first error. Our validators carry their own sentence. */
 export function errorText(errors: ValidationErrors | null, label: string): string {
@@ -8,22 +8,48 @@ export function errorText(errors: ValidationErrors | null, label: string): strin
   const [name, detail] = Object.entries(errors)[0] ?? [];
   if (typeof detail === 'string') return detail;
   const what = label.charAt(0).toLowerCase() + label.slice(1);
-  if (name === 'required') return `Enter ${what}.`;
+  if (name === 'required') return `Enter the ${what}.`;
   if (name === 'min') return `At least ${(detail as { min: number }).min}.`;
   if (name === 'max') return `At most ${(detail as { max: number }).max}.`;
   if (name === 'maxlength') {
     return `At most ${(detail as { requiredLength: number }).requiredLength} characters.`;
   }
-  return `Check ${what}.`;
+  return `Check the ${what}.`;
 }
 
 /** A control's errors as a signal: null until the person has left the field. */
+export class ShownErrors {
+  private readonly state = signal<ValidationErrors | null>(null);
+  private control: AbstractControl | null = null;
+  private subscription: Subscription | undefined;
+
+  readonly errors = this.state.asReadonly();
+
+  constructor(destroyRef: DestroyRef) {
+    destroyRef.onDestroy(() => this.subscription?.unsubscribe());
+  }
+
+  /** Called at each check: a list that re-orders its rows gives a field another control. */
+  follow(control: AbstractControl | null): void {
+    if (control === this.control) return;
+    this.control = control;
+    this.subscription?.unsubscribe();
+    this.subscription = control?.events.subscribe(() => this.read());
+    this.read();
+  }
+
+  private read(): void {
+    const { control } = this;
+    this.state.set(control?.touched && control.invalid ? control.errors : null);
+  }
+}
+
+/** The same for a control that stays with its field. */
 export function shownErrors(
   control: AbstractControl,
   destroyRef: DestroyRef,
 ): Signal<ValidationErrors | null> {
-  const read = () => (control.touched && control.invalid ? control.errors : null);
-  const errors = signal(read());
-  control.events.pipe(takeUntilDestroyed(destroyRef)).subscribe(() => errors.set(read()));
-  return errors.asReadonly();
+  const shown = new ShownErrors(destroyRef);
+  shown.follow(control);
+  return shown.errors;
 }

@@ -1,4 +1,5 @@
 import {
+  type AfterContentChecked,
   booleanAttribute,
   ChangeDetectionStrategy,
   Component,
@@ -8,9 +9,7 @@ import {
   inject,
   Injector,
   input,
-  type OnInit,
   signal,
-  type Signal,
 } from '@angular/core';
 import {
   type ControlValueAccessor,
@@ -25,7 +24,7 @@ import { formatHeld, formatInput } from '@shared/model/quantity-format';
 import { KINDS, type QuantityKind } from '@shared/model/quantity-units';
 
 import { fieldId } from '../field/field-id';
-import { errorText, shownErrors } from '../field/field-state';
+import { errorText, ShownErrors } from '../field/field-state';
 
 /** What the field holds: the number in the unit of the contract, and the text as typed. */
 export interface TypedQuantity {
@@ -47,9 +46,9 @@ export interface TypedQuantity {
   ],
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
-export class QuantityField implements ControlValueAccessor, Validator, OnInit {
+export class QuantityField implements ControlValueAccessor, Validator, AfterContentChecked {
   private readonly injector = inject(Injector);
-  private readonly destroyRef = inject(DestroyRef);
+  private readonly shown = new ShownErrors(inject(DestroyRef));
 
   readonly label = input.required<string>();
   readonly path = input.required<string>();
@@ -66,7 +65,6 @@ export class QuantityField implements ControlValueAccessor, Validator, OnInit {
   protected readonly text = signal('');
   protected readonly disabled = signal(false);
   private readonly taken = signal<ReadQuantity | null>(null);
-  private readonly errors = signal<Signal<ValidationErrors | null> | null>(null);
 
   protected readonly controlId = computed(() => fieldId(this.path()));
   protected readonly bareUnit = computed(() => this.unit() ?? KINDS[this.kind()].unit);
@@ -86,7 +84,7 @@ export class QuantityField implements ControlValueAccessor, Validator, OnInit {
   });
   protected readonly error = computed(() => {
     if (this.problem()) return this.problem();
-    const errors = this.errors()?.() ?? null;
+    const errors = this.shown.errors();
     if (!errors || this.question()) return '';
     const own = errors['quantity'] as string | undefined;
     if (own) return own;
@@ -109,10 +107,11 @@ export class QuantityField implements ControlValueAccessor, Validator, OnInit {
   private notifyChange: (value: TypedQuantity | null) => void = () => undefined;
   protected notifyTouched: () => void = () => undefined;
 
-  ngOnInit(): void {
-    // Not in the constructor: the form directive needs this accessor first.
-    const control = this.injector.get(NgControl, null, { self: true, optional: true })?.control;
-    if (control) this.errors.set(shownErrors(control, this.destroyRef));
+  ngAfterContentChecked(): void {
+    // Asked for late: the form directive needs this accessor before it exists itself.
+    this.shown.follow(
+      this.injector.get(NgControl, null, { self: true, optional: true })?.control ?? null,
+    );
   }
 
   writeValue(quantity: TypedQuantity | null): void {

@@ -9,7 +9,7 @@ import {
   signal,
 } from '@angular/core';
 import { type Reach, reachName, type ReachSide } from '@shared/drawing/reach';
-import { METRICS, metricsForWidth } from '@shared/drawing/reach-axis';
+import { METRICS, metricsForWidth, withoutAxis } from '@shared/drawing/reach-axis';
 import { reachStrip, type Sill } from '@shared/drawing/reach-strip';
 import { formatFull } from '@shared/model/quantity-format';
 
@@ -31,7 +31,7 @@ const SIDE_WORDS: Readonly<Record<ReachSide, string>> = {
   imports: [Drawing],
   templateUrl: './reach-strip.html',
   styleUrl: './reach-strip.scss',
-  host: { '[class.faded]': 'faded()' },
+  host: { '[class.faded]': 'faded()', '[class.fluid]': "size() !== 'row'" },
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class ReachStrip {
@@ -44,6 +44,8 @@ export class ReachStrip {
   readonly size = input<'row' | 'card' | 'page'>('page');
   /** Left gutter in px, wide enough for a chart's labels; the chart below takes the same. */
   readonly gutter = input<number>();
+  /** A chart stands directly below and carries the axis for both. */
+  readonly joined = input(false, { transform: booleanAttribute });
   /** In a table, where the numbers stand beside it as text. */
   readonly decorative = input(false, { transform: booleanAttribute });
   /** Each sill can be reached with Tab and the arrows and says its unrounded distance. */
@@ -59,7 +61,8 @@ export class ReachStrip {
     // Until the panel is measured the strip takes no more than a card.
     if (width === 0) return METRICS.card;
     const fitting = metricsForWidth(width, this.gutter());
-    return this.size() === 'card' && fitting.size === 'page' ? METRICS.card : fitting;
+    const chosen = this.size() === 'card' && fitting.size === 'page' ? METRICS.card : fitting;
+    return this.joined() ? withoutAxis(chosen) : chosen;
   });
   protected readonly drawing = computed(() => reachStrip(this.reach(), this.metrics()));
   protected readonly name = computed(() =>

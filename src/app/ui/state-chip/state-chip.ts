@@ -21,6 +21,7 @@ const FORMS: Readonly<Record<ChipState, readonly [form: Form, icon: IconName]>> 
   approved: ['signed', 'seal'],
   stale: ['stale', 'broken'],
   superseded: ['dashed', 'double-tick'],
+  withdrawn: ['filled', 'barred'],
   discarded: ['dashed', 'close'],
 
   requested: ['dashed', 'send'],
@@ -39,7 +40,6 @@ const FORMS: Readonly<Record<ChipState, readonly [form: Form, icon: IconName]>> 
   'on-loan': ['edge', 'arrows'],
   transferring: ['edge', 'arrows'],
   rejected: ['stop', 'close'],
-  withdrawn: ['filled', 'barred'],
   transferred: ['dashed', 'double-tick'],
   disposed: ['dashed', 'close'],
 
@@ -47,6 +47,9 @@ const FORMS: Readonly<Record<ChipState, readonly [form: Form, icon: IconName]>> 
   'review-due': ['stale', 'clock'],
   active: ['signed', 'ringed-dot'],
 };
+
+/** A purchase that was given up is no alarm; an evaluation withdrawn as wrong is one. */
+const LASER_WITHDRAWN = ['dashed', 'close'] as const;
 
 const WORDS: Readonly<Record<ChipState, string>> = {
   ...LASER_STATE_WORDS,
@@ -67,10 +70,17 @@ const WORDS: Readonly<Record<ChipState, string>> = {
 })
 export class StateChip {
   readonly state = input.required<ChipState>();
+  /** Two life cycles have a state `withdrawn`. */
+  readonly record = input<'evaluation' | 'laser'>('evaluation');
   /** Another word in the same form: "Evaluation stale". */
   readonly word = input('');
 
-  protected readonly form = computed(() => FORMS[this.state()][0]);
-  protected readonly icon = computed(() => FORMS[this.state()][1]);
+  private readonly look = computed(() =>
+    this.state() === 'withdrawn' && this.record() === 'laser'
+      ? LASER_WITHDRAWN
+      : FORMS[this.state()],
+  );
+  protected readonly form = computed(() => this.look()[0]);
+  protected readonly icon = computed(() => this.look()[1]);
   protected readonly shown = computed(() => this.word() || WORDS[this.state()]);
 }

@@ -1,6 +1,7 @@
 import { changedInputs } from '@shared/model/laser-inputs';
 
 import type { Context } from '../../context/context';
+import { NotFound } from '../../http/errors';
 import { transition } from '../../workflow/transition';
 import {
   hashOfInputs,
@@ -12,7 +13,7 @@ import {
 } from '../lasers/laser-standing-service';
 import { evaluationSubject, EVALUATION_WORKFLOW } from './evaluation-life-cycle';
 import type { EvaluationRecord } from './evaluation-record';
-import { findEvaluationsOf, updateEvaluationMarks } from './evaluation-repository';
+import { findEvaluation, findEvaluationsOf, updateEvaluationMarks } from './evaluation-repository';
 
 /**
  * What the evaluations of a laser become when its inputs are no longer theirs: a signed one is
@@ -37,6 +38,16 @@ export async function areaChanged(ctx: Context, areaId: string): Promise<void> {
     await evaluationsFollowInputs(ctx, laserId);
     await refreshStanding(ctx, laserId);
   }
+}
+
+/** An evaluation whatever its place; 404 when there is none. */
+export async function requireEvaluation(
+  ctx: Pick<Context, 'tx'>,
+  id: string,
+): Promise<EvaluationRecord> {
+  const evaluation = await findEvaluation(ctx.tx, id);
+  if (!evaluation) throw new NotFound('evaluation');
+  return evaluation;
 }
 
 /** The review date of a signed evaluation has passed. */

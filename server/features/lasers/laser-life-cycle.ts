@@ -191,7 +191,10 @@ function guards(): Readonly<Record<LaserGuard, LaserGuardCheck>> {
       when(!laser.input.keyLocation, 'Record where the key is kept.'),
     'both-supervisors': ({ laser }, { input }) => [
       ...when(placementOf(laser).supervisorIds.length === 0, 'The laser has no supervisor.'),
-      ...when(input !== undefined && !input.area, 'Name the receiving area.'),
+      ...when(
+        input !== undefined && !input.area && !input.reason,
+        'Name the receiving area, or the receiver outside the site.',
+      ),
       ...when(
         input?.area !== undefined && placementOfArea(input.area).supervisorIds.length === 0,
         'The receiving area has no supervisor.',

@@ -19,7 +19,7 @@ import type { Emission } from '@shared/model/lasers';
   styles: `
     dl > div {
       display: grid;
-      grid-template-columns: minmax(0, 1fr) minmax(0, 1.1fr) auto;
+      grid-template-columns: 96px minmax(0, 1fr) 74px;
       gap: 2px 8px;
       padding-block: 3px;
       font: var(--lm-label);

@@ -3,7 +3,7 @@ import { ReactiveFormsModule } from '@angular/forms';
 import type { RuleSetId } from '@shared/hazard/rule-sets';
 import { ACTIVITIES, type LaserInputs } from '@shared/model/evaluations';
 import { formatWavelength } from '@shared/model/quantity-format';
-import { emissionSummary } from '@shared/model/laser-summary';
+import { emissionSummary, lineOf } from '@shared/model/laser-summary';
 import { ACTIVITY_WORDS } from '@shared/text/hazard-words';
 
 import { Control } from '../../../ui/field/control';
@@ -50,6 +50,7 @@ export class ScenarioFields {
   protected readonly lines = computed(() =>
     this.laserInputs().emissions.map((line) => ({
       line,
+      swatch: lineOf(line),
       summary: emissionSummary(line),
       range: line.wavelengthToNm
         ? `from ${formatWavelength(line.wavelengthNm.value).text} to ${formatWavelength(line.wavelengthToNm.value).text}`

@@ -30,6 +30,8 @@ export class ResultFigures {
   /** The sealed results, shown beside those of today. */
   readonly sealed = input<ResultView | null>(null);
 
+  /** Room for the chart's labels left of the axis that it shares with the strip, px. */
+  protected readonly gutter = 66;
   protected readonly reach = computed(() => {
     const { view } = this.outcome();
     return view && this.reachOf(view);

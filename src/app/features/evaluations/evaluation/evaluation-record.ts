@@ -10,9 +10,11 @@ import { output } from '@angular/core';
 import { ruleSetById } from '@shared/hazard/rule-sets';
 import { evaluateScenarios } from '@shared/model/evaluation-case';
 import type { Evaluation, EvaluationTransition } from '@shared/model/evaluations';
+import { emissionSummary, lineOf } from '@shared/model/laser-summary';
 import type { Problem } from '@shared/model/problem';
 import { ACTIVITY_WORDS } from '@shared/text/hazard-words';
 
+import { LineSwatch } from '../../../ui/line-swatch/line-swatch';
 import { Quantity } from '../../../ui/quantity/quantity';
 import { CaseInputs } from '../inputs/case-inputs';
 import { LineFigures } from '../inputs/line-figures';
@@ -30,6 +32,7 @@ import { ResultGrounds } from '../results/result-grounds';
   imports: [
     CaseInputs,
     LineFigures,
+    LineSwatch,
     Quantity,
     ResultFigures,
     ResultFold,
@@ -92,7 +95,13 @@ export class EvaluationRecord {
   protected readonly sealedView = computed(() => (this.today()?.view ? this.outcome().view : null));
   protected readonly lines = computed(() => {
     const ids = this.selected()?.scenario.emissionIds ?? [];
-    return this.evaluation().laserInputs.emissions.filter((line) => ids.includes(line.id));
+    return this.evaluation()
+      .laserInputs.emissions.filter(({ id }) => ids.includes(id))
+      .map((emission) => ({
+        emission,
+        swatch: lineOf(emission),
+        summary: emissionSummary(emission),
+      }));
   });
   protected readonly notCovered = computed(() =>
     this.evaluation().input.notCovered.map(({ activity, reason }) => ({

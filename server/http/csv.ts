@@ -24,8 +24,13 @@ async function* csvLines<Row>(
   columns: readonly CsvColumn<Row>[],
   rows: Iterable<Row> | AsyncIterable<Row>,
 ): AsyncGenerator<string> {
-  yield csvLine(columns.map((column) => column.header));
-  for await (const row of rows) yield csvLine(columns.map((column) => column.cell(row)));
+  let before = csvLine(columns.map((column) => column.header));
+  // One line behind: a filter that is refused shows before the header is on its way.
+  for await (const row of rows) {
+    yield before;
+    before = csvLine(columns.map((column) => column.cell(row)));
+  }
+  yield before;
 }
 
 /** One line; text that a spreadsheet would run as a formula gets an apostrophe in front. */

@@ -21,8 +21,19 @@ export async function sendDownload(res: Response, download: Download): Promise<v
     res.end(body);
     return;
   }
-  const stream = body instanceof Readable ? body : Readable.from(body);
-  await pipeline(stream, res);
+  await pipeline(Readable.from(await begun(body)), res);
+}
+
+/** Waits for the first part, so that what fails at once is answered as a problem, not as a torn file. */
+async function begun<T>(parts: AsyncIterable<T>): Promise<AsyncIterable<T>> {
+  const iterator = parts[Symbol.asyncIterator]();
+  const first = await iterator.next();
+  const rest: AsyncIterable<T> = { [Symbol.asyncIterator]: () => iterator };
+  return (async function* () {
+    if (first.done) return;
+    yield first.value;
+    yield* rest;
+  })();
 }
 
 /** Both forms of RFC 6266: a plain one without quotes or controls, and the whole name in UTF-8. */

@@ -112,14 +112,19 @@ describe('guards', () => {
       'Evaluate maintenance, or say why it is not evaluated.',
       'Evaluate service, or say why it is not evaluated.',
     ]);
-    const offered = saved.body.offered.find((one: { event: string }) => one.event === 'send-to-check');
+    const offered = saved.body.offered.find(
+      (one: { event: string }) => one.event === 'send-to-check',
+    );
     expect(offered.reasons).toEqual(refused.body.reasons);
   });
 
   it('an author neither checks nor signs, whatever the role (SD2)', async () => {
     const laserId = await openLaser();
     const { body } = await team.lso.post('/api/evaluations', { laserId }).expect(201);
-    const notCovered = ['maintenance', 'service'].map((activity) => ({ activity, reason: 'Maker.' }));
+    const notCovered = ['maintenance', 'service'].map((activity) => ({
+      activity,
+      reason: 'Maker.',
+    }));
     const path = `/api/evaluations/${body.id}`;
     await team.lso.put(path, { ...body.input, notCovered }, body.version).expect(200);
     await stepEvaluation(team.lso, body.id, { event: 'send-to-check' });
@@ -220,9 +225,7 @@ describe('what the sealed rests on changes', () => {
 
     const stale = await readEvaluation(team.lso, id);
     expect(stale.state).toBe('stale');
-    expect(stale.staleReasons).toContain(
-      '532 nm: power: 5 W (data sheet) → 10 W (data sheet).',
-    );
+    expect(stale.staleReasons).toContain('532 nm: power: 5 W (data sheet) → 10 W (data sheet).');
     expect(stale.inputsChanged.map(({ field }) => field)).toEqual([
       '532 nm: power',
       'doubled, 266 nm',
@@ -341,7 +344,9 @@ describe('newer versions and errors', () => {
     const statuses = (await Promise.all(acts)).map(({ status }) => status);
     expect(statuses.filter((status) => status === 200)).toHaveLength(1);
     // Refused: the version moved on, or the limit of passwords was reached and the session ended.
-    expect(statuses.filter((status) => ![200, 401, 403, 409, 412, 429].includes(status))).toEqual([]);
+    expect(statuses.filter((status) => ![200, 401, 403, 409, 412, 429].includes(status))).toEqual(
+      [],
+    );
     const sealed = await readEvaluation(team.deputy, id);
     expect(sealed.signatures.filter(({ meaning }) => meaning === 'approved')).toHaveLength(1);
     app.clock.advance({ minutes: 20 });

@@ -92,15 +92,12 @@ it('starts empty, takes the first administrator by the printed token once, and s
   const cookies = session.headers['set-cookie'] as unknown as string[];
   const csrf = /XSRF-TOKEN=([^;]+)/.exec(cookies.join())?.[1] ?? '';
   const setUp = (given: string) =>
-    agent
-      .post('/api/setup')
-      .set({ Origin: publicUrl, 'X-XSRF-TOKEN': csrf })
-      .send({
-        token: given,
-        name: 'Ada',
-        email: 'ada@site.example',
-        password: 'four tall quiet towers',
-      });
+    agent.post('/api/setup').set({ Origin: publicUrl, 'X-XSRF-TOKEN': csrf }).send({
+      token: given,
+      name: 'Ada',
+      email: 'ada@site.example',
+      password: 'four tall quiet towers',
+    });
   await setUp('not-the-token').expect(410);
   const created = await setUp(token).expect(201);
   expect(created.body.user).toMatchObject({ name: 'Ada', roles: ['administrator'] });

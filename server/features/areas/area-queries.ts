@@ -1,5 +1,6 @@
 import type { AreaListQuery } from '@shared/model/areas';
 import type { PersonRef } from '@shared/model/common';
+import { LASER_LIFE_CYCLE } from '@shared/workflow/laser-life-cycle';
 
 import type { Reach } from '../../auth/scope';
 import type { Tx } from '../../db/database';
@@ -12,6 +13,9 @@ import type { AreaTable } from './areas-table';
 export interface AreaRow extends StoredArea {
   readonly supervisor?: PersonRef | undefined;
   readonly alternate?: PersonRef | undefined;
+  readonly laserCount: number;
+  /** Of the lasers there, verified before declared. */
+  readonly highestClass?: string | undefined;
 }
 
 /** Areas within reach, by code. */
@@ -55,16 +59,39 @@ function selectAreas(tx: Tx) {
     .leftJoin('people as supervisors', 'supervisors.id', 'areas.supervisor_id')
     .leftJoin('people as alternates', 'alternates.id', 'areas.alternate_id')
     .selectAll('areas')
-    .select(['supervisors.name as supervisor_name', 'alternates.name as alternate_name']);
+    .select(['supervisors.name as supervisor_name', 'alternates.name as alternate_name'])
+    .select((eb) => {
+      const lasers = eb
+        .selectFrom('lasers')
+        .whereRef('lasers.area_id', '=', 'areas.id')
+        .where('lasers.state', 'not in', LASER_LIFE_CYCLE.terminal);
+      return [
+        lasers.select(eb.fn.countAll<number>().as('count')).as('laser_count'),
+        lasers
+          .select(({ fn }) =>
+            fn.coalesce('lasers.verified_class', 'lasers.declared_class').as('class'),
+          )
+          .orderBy('lasers.class_rank', 'desc')
+          .limit(1)
+          .as('highest_class'),
+      ];
+    });
 }
 
-function toAreaRow(
-  row: AreaTable & { supervisor_name: string | null; alternate_name: string | null },
-): AreaRow {
+interface JoinedRow extends AreaTable {
+  supervisor_name: string | null;
+  alternate_name: string | null;
+  laser_count: number | null;
+  highest_class: string | null;
+}
+
+function toAreaRow(row: JoinedRow): AreaRow {
   return {
     ...toArea(row),
     supervisor: personRef(row.supervisor_id, row.supervisor_name),
     alternate: personRef(row.alternate_id, row.alternate_name),
+    laserCount: row.laser_count ?? 0,
+    highestClass: row.highest_class ?? undefined,
   };
 }
 

@@ -102,11 +102,7 @@ async function readStored(ctx: Context, id: string): Promise<Area> {
 }
 
 function forReader(ctx: Context, row: AreaRow): Area {
-  return {
-    ...row,
-    laserCount: 0,
-    mayEdit: isInScope(ctx, 'area.update', placementOf(row)),
-  };
+  return { ...row, mayEdit: isInScope(ctx, 'area.update', placementOf(row)) };
 }
 
 async function requireUsable(ctx: Context, input: AreaInput, ownId: string | undefined) {

@@ -15,6 +15,7 @@ import { EVALUATE_ROUTES } from './features/evaluate/evaluate-routes';
 import { AGEING } from './features/evaluations/evaluation-jobs';
 import { EVALUATIONS_ROUTES } from './features/evaluations/evaluations-routes';
 import { HEALTH_ROUTES } from './features/health/health-routes';
+import { LASER_IMPORTS_ROUTES } from './features/laser-imports/laser-imports-routes';
 import { LASERS_ROUTES } from './features/lasers/lasers-routes';
 import { PEOPLE_ROUTES } from './features/people/people-routes';
 import { RECORDS_ROUTES } from './features/records/records-routes';
@@ -41,6 +42,7 @@ export const ROUTES: readonly Route[] = withDescription([
   ...SETTINGS_ROUTES,
   ...RECORDS_ROUTES,
   ...LASERS_ROUTES,
+  ...LASER_IMPORTS_ROUTES,
   ...EVALUATIONS_ROUTES,
   ...EVALUATE_ROUTES,
   ...TODAY_ROUTES,

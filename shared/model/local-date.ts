@@ -5,14 +5,25 @@ const DAY_MS = 86_400_000;
 
 /** The date at `instant` in `zone`. */
 export function localDateAt(instant: Date, zone: string): LocalDate {
-  const parts = new Intl.DateTimeFormat('en-US', {
+  const parts = formatOf(zone).formatToParts(instant);
+  const part = (type: string) => parts.find((one) => one.type === type)?.value ?? '';
+  return `${part('year').padStart(4, '0')}-${part('month')}-${part('day')}`;
+}
+
+/** A formatter takes longer to make than to use: one for each zone. */
+const FORMATS = new Map<string, Intl.DateTimeFormat>();
+
+function formatOf(zone: string): Intl.DateTimeFormat {
+  const known = FORMATS.get(zone);
+  if (known) return known;
+  const format = new Intl.DateTimeFormat('en-US', {
     timeZone: zone,
     year: 'numeric',
     month: '2-digit',
     day: '2-digit',
-  }).formatToParts(instant);
-  const part = (type: string) => parts.find((one) => one.type === type)?.value ?? '';
-  return `${part('year').padStart(4, '0')}-${part('month')}-${part('day')}`;
+  });
+  FORMATS.set(zone, format);
+  return format;
 }
 
 /**

@@ -108,15 +108,17 @@ export function isSealIntact(
   );
 }
 
-/** Whether a signature is whole, and signs what the evaluation says now. */
-export function isSignatureIntact(
-  signature: StoredSignature,
+/** Whether each signature is whole, and signs what the evaluation says now. */
+export function intactSignatures(
+  signatures: readonly StoredSignature[],
   evaluation: EvaluationRecord,
-): boolean {
-  return (
-    signature.evaluationId === evaluation.id &&
-    signature.contentSha256 === contentHash(evaluation) &&
-    signature.sha256 === signatureHash(signature)
+): readonly boolean[] {
+  const content = signatures.length > 0 ? contentHash(evaluation) : '';
+  return signatures.map(
+    (signature) =>
+      signature.evaluationId === evaluation.id &&
+      signature.contentSha256 === content &&
+      signature.sha256 === signatureHash(signature),
   );
 }
 

@@ -13,7 +13,7 @@ import {
 import type { StoredSignature } from './evaluation-record';
 import { findSeal, findSignatures } from './evaluation-repository';
 import { changedResults } from './evaluation-results';
-import { isSealIntact, isSignatureIntact } from './evaluation-seal';
+import { intactSignatures, isSealIntact } from './evaluation-seal';
 
 /** The evaluation as its page shows it: signatures verified now, inputs compared now. */
 export async function evaluationView(
@@ -31,6 +31,7 @@ export async function evaluationView(
   const isIntact = seal
     ? isSealIntact(seal, evaluation, stored)
     : evaluation.sealedAt === null;
+  const intact = intactSignatures(stored, evaluation);
   const isOpen = EDITABLE.has(evaluation.state);
   return {
     id: evaluation.id,
@@ -68,8 +69,8 @@ export async function evaluationView(
     staleReasons: [...evaluation.staleReasons],
     whatChanged: differs && !isOver(evaluation.state) ? changedResults(evaluation, today) : [],
     inputsChanged: differs ? changedInputs(evaluation.laserInputs, today) : [],
-    signatures: stored.map((signature) =>
-      signatureView(signature, isIntact && isSignatureIntact(signature, evaluation)),
+    signatures: stored.map((signature, index) =>
+      signatureView(signature, isIntact && intact[index] === true),
     ),
     ...(seal ? { sealSha256: seal.sha256 } : {}),
     ...(evaluation.returnComment ? { returnComment: evaluation.returnComment } : {}),

@@ -106,6 +106,25 @@ export async function storeLaser(
   return moveLaser(ctx, await requireLaser(ctx, id), { event: by, input: {}, isNew: true });
 }
 
+/** What would keep this laser from being entered: for a dry run. Nothing is stored. */
+export async function entryErrors(ctx: Context, given: LaserInput): Promise<FieldError[]> {
+  const input = withoutBlanks(given);
+  const area = await placeFor(ctx, input);
+  const errors = [...(await unknownPeople(ctx, input)), ...outsideScope(ctx, input, area)];
+  if (input.tag && (await findLaserIdByTag(ctx.tx, input.tag))) {
+    errors.push({ path: 'tag', message: `The tag ${input.tag} is on record already.` });
+  }
+  const key = serialKey(input.serial);
+  if (key !== null) {
+    const [same] = await findBySerial(ctx.tx, { key, maker: input.maker });
+    if (same) {
+      const message = `${same.tag} of the same maker has this serial already.`;
+      errors.push({ path: 'serial', message });
+    }
+  }
+  return errors;
+}
+
 export async function changeLaser(
   ctx: Context,
   id: string,

@@ -35,7 +35,7 @@ async function* csvLines<Row>(
 
 /** One line; text that a spreadsheet would run as a formula gets an apostrophe in front. */
 export function csvLine(cells: readonly Cell[]): string {
-  return stringify([cells.map(safeCell)], { record_delimiter: 'windows' });
+  return stringify([cells.map(safeCell)], { record_delimiter: 'windows', quoted_match: /[\r\n]/ });
 }
 
 /** Characters with which spreadsheets begin a formula, full-width forms included. */

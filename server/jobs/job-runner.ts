@@ -28,12 +28,17 @@ export function createJobRunner(edges: Edges, jobs: readonly Job[]): JobRunner {
   let running = Promise.resolve();
 
   async function tick(): Promise<void> {
-    for (const job of jobs) await runWhenDue(edges, job, owner);
+    for (const job of jobs) {
+      try {
+        await runWhenDue(edges, job, owner);
+      } catch (error) {
+        // Whatever the work throws: the next tick tries again, and other jobs must not wait for it.
+        edges.log.error({ err: error, job: job.name }, 'a job failed; it will run again');
+      }
+    }
   }
   function tickOnce(): Promise<void> {
-    running = running.then(tick).catch((error: unknown) => {
-      edges.log.error({ err: error }, 'a job failed; it will run again');
-    });
+    running = running.then(tick);
     return running;
   }
   return {

@@ -54,7 +54,9 @@ function beamNumbers(
   const numbers: Record<string, number> = {
     [`${prefix}.mpe.radiantExposure`]: candidate.limit.toNumber(),
     [`${prefix}.mpe.irradiance`]: candidate.limit.mul(rate).toNumber(),
-    [`${prefix}.mpe.limitingAperture`]: candidate.apertureMm.toNumber(),
+    ...(isOpen(beam)
+      ? {}
+      : { [`${prefix}.mpe.limitingAperture`]: candidate.apertureMm.toNumber() }),
     [`${prefix}.exposure.radiantExposure`]: exposure.toNumber(),
     [`${prefix}.exposure.irradiance`]: exposure.mul(rate).toNumber(),
     [`${prefix}.exposure.distance`]: beam.distanceM.toNumber(),
@@ -68,4 +70,13 @@ function beamNumbers(
       : 0;
   }
   return numbers;
+}
+
+/** Whether limits over different apertures govern alike, so that either may be named. */
+function isOpen({ governing, all }: ModelSideResult['perBeam'][number]): boolean {
+  return all.some(
+    ({ candidate, ratio }) =>
+      !candidate.apertureMm.eq(governing.candidate.apertureMm) &&
+      ratio.div(governing.ratio).gt(1 - 1e-9),
+  );
 }

@@ -111,7 +111,8 @@ export function exposureChart(model: ExposureChartModel, metrics: ReachMetrics):
     curve(model.points, 'ink', { metrics, scale, width: 2.2 * metrics.px }),
     ...model.limits.flatMap((limit) => limitShapes(limit, metrics, scale)),
     ...limitLabels(model, metrics, scale),
-    titleShape(model, metrics, scale),
+    // On a phone the title would hide the curve; it stands above the chart there.
+    ...(metrics.size === 'phone' ? [] : [titleShape(model, metrics, scale)]),
   ];
   return { width: widthOf(metrics), height: scale.bottom + 24 * metrics.px, shapes };
 }

@@ -55,7 +55,7 @@ export function metricsForWidth(width: number, gutter?: number): ReachMetrics {
 
 /** The same strip when a chart below carries the axis. */
 export function withoutAxis(metrics: ReachMetrics): ReachMetrics {
-  return { ...metrics, axisText: 0, height: metrics.base + metrics.foot + 5 * metrics.px };
+  return { ...metrics, axisText: 0, height: metrics.base + metrics.foot };
 }
 
 export function widthOf(metrics: ReachMetrics): number {

@@ -157,20 +157,21 @@ function closedSill(metrics: ReachMetrics): Shape[] {
   const { base: y, px, size, left } = metrics;
   const x = left + footPath(0, metrics).half + 2 * px;
   const top = y - (y - laneTop(metrics)) * 0.5;
+  const isRow = size === 'row';
   const text = Math.max(13 * px, metrics.text);
-  const [textX, textY] = [x + 10 * px, y - (size === 'row' ? 3 : 8 * px)];
-  const length = textWidth(NOWHERE, text);
+  const [textX, textY] = [x + 10 * px, y - (isRow ? 3 : 8 * px)];
+  const ground: Shape = {
+    kind: 'rect',
+    x: textX - 3 * px,
+    y: textY - text,
+    width: textWidth(NOWHERE, text) + 6 * px,
+    height: text + 3 * px,
+    fill: 'sheet',
+  };
   return [
     { kind: 'path', d: linePath(x, top, x, y), stroke: 'spruce', strokeWidth: 2 * px },
     { kind: 'path', d: footPath(x, metrics).d, fill: 'spruce' },
-    {
-      kind: 'rect',
-      x: textX - 3 * px,
-      y: textY - text,
-      width: length + 6 * px,
-      height: text + 3 * px,
-      fill: 'sheet',
-    },
+    ...(isRow ? [] : [ground]),
     {
       kind: 'text',
       x: textX,
@@ -211,7 +212,7 @@ function wallOf(reach: ReachDistances, metrics: ReachMetrics, isZero: boolean) {
       kind: 'text',
       x: fitsLeft ? x - 5 * px : x + 5 * px,
       y: laneTop(metrics) - 3 * px,
-      size: metrics.axisText,
+      size: 0.88 * metrics.text,
       anchor: fitsLeft ? 'end' : 'start',
       parts: [{ text, fill: 'ink2' }],
       halo: 3 * px,

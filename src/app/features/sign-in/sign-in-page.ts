@@ -12,11 +12,13 @@ import { Control } from '../../ui/field/control';
 import { Field } from '../../ui/field/field';
 import { zodValidator } from '../../ui/field/zod-validator';
 import { Icon } from '../../ui/icon/icon';
+import { ReachStrip } from '../../ui/reach-strip/reach-strip';
+import { EXAMPLE_REACH, EXAMPLE_WORDS } from './sign-in-example';
 
 /** The way in, with an e-mail address and a password, or with a demo account. */
 @Component({
   selector: 'lm-sign-in-page',
-  imports: [Control, Field, Icon, MatButton, ReactiveFormsModule, WordMark],
+  imports: [Control, Field, Icon, MatButton, ReachStrip, ReactiveFormsModule, WordMark],
   templateUrl: './sign-in-page.html',
   styleUrl: './sign-in-page.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -28,6 +30,8 @@ export class SignInPage {
   /** Where the person wanted to go; a path on this site. */
   readonly next = input<string>();
 
+  protected readonly exampleReach = EXAMPLE_REACH;
+  protected readonly exampleWords = EXAMPLE_WORDS;
   protected readonly site = this.session.site;
   protected readonly demoAccounts = this.session.demoAccounts;
   protected readonly offline = this.session.problem;

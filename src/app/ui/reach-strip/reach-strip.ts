@@ -6,7 +6,6 @@ import {
   ElementRef,
   inject,
   input,
-  signal,
 } from '@angular/core';
 import { type Reach, reachName, type ReachSide } from '@shared/drawing/reach';
 import { METRICS, metricsForWidth, withoutAxis } from '@shared/drawing/reach-axis';
@@ -53,8 +52,6 @@ export class ReachStrip {
   /** The sealed state beside today's. */
   readonly faded = input(false, { transform: booleanAttribute });
 
-  protected readonly pointed = signal<Sill | null>(null);
-
   protected readonly metrics = computed(() => {
     if (this.size() === 'row') return METRICS.row;
     const width = this.available();
@@ -73,7 +70,7 @@ export class ReachStrip {
   );
 
   protected words(sill: Sill): string {
-    return `${SIDE_WORDS[sill.side]} ${formatFull(sill.distanceM, 'm')}`;
+    return `${SIDE_WORDS[sill.side]}, unrounded ${formatFull(sill.distanceM, 'm')}`;
   }
 
   protected move(event: KeyboardEvent, index: number): void {

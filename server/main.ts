@@ -4,7 +4,7 @@ import { type Config, ConfigError, readConfig } from './config/config';
 import { NewerSchemaError } from './db/migrate';
 import { isEmpty, seedDemo } from './demo/seed-demo';
 import { offerSetup } from './features/account/account-service';
-import { demoAccounts } from './features/session/demo-accounts';
+import { demoAccounts } from './config/demo-accounts';
 import { createLog, openProduct, type Product } from './start';
 
 const STOP_WITHIN_MS = 10_000;

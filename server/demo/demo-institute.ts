@@ -5,7 +5,7 @@ import { hashPassword } from '../auth/passwords';
 import { type Actor, type Context, SYSTEM } from '../context/context';
 import { createArea } from '../features/areas/areas-service';
 import { changePerson, createPerson } from '../features/people/people-service';
-import { DEMO_PASSWORD, demoEmail } from '../features/session/demo-accounts';
+import { DEMO_PASSWORD, demoEmail } from '../config/demo-accounts';
 import { changeSettings } from '../features/settings/settings-service';
 import { DEMO_AREAS } from './demo-areas';
 import { DEMO_PEOPLE, type DemoPerson, type DemoPersonId, DEPARTMENTS } from './demo-people';

@@ -7,7 +7,6 @@ import { ApiError, InvalidInput, TooLarge, Unavailable, UnsupportedMedia } from 
 /** Answers everything thrown as RFC 9457 problem details; what nobody expected is logged once. */
 export function problemDetails(log: Logger): ErrorRequestHandler {
   // Express knows an error handler by its four parameters.
-  // eslint-disable-next-line @typescript-eslint/no-unused-vars
   return (error: unknown, req, res, _next) => {
     const requestId = String(req.id);
     const known = asApiError(error);

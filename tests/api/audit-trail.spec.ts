@@ -86,8 +86,10 @@ function rehash(db: Database, first: number): void {
   const entries = entriesOf(db);
   let previous = entries.find((entry) => entry.sequence === first - 1)?.hash ?? GENESIS_HASH;
   const update = db.prepare('update audit_trail set hash = ? where sequence = ?');
-  for (const { hash: _old, ...entry } of entries.filter((it) => it.sequence >= first)) {
-    previous = rowHash(previous, entry as unknown as Parameters<typeof rowHash>[1]);
+  for (const entry of entries.filter((it) => it.sequence >= first)) {
+    const content: Partial<Entry> = { ...entry };
+    delete content.hash;
+    previous = rowHash(previous, content as unknown as Parameters<typeof rowHash>[1]);
     update.run(previous, entry.sequence);
   }
 }

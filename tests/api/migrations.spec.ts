@@ -67,7 +67,7 @@ describe('migrations', () => {
 
   it('of a newer version are refused', async () => {
     await migrate(db, MIGRATIONS, NOW);
-    const { '2026-12-01-1200-create-people': _first, ...older } = MIGRATIONS;
+    const older = Object.fromEntries(Object.entries(MIGRATIONS).slice(1));
     await expect(migrate(db, older, NOW)).rejects.toThrow(NewerSchemaError);
   });
 });

@@ -130,8 +130,8 @@ function textOf(schema: JsonSchema): Arbitrary<string> {
 }
 
 function numberOf(schema: JsonSchema): Arbitrary<number> {
-  const min = schema.minimum ?? schema.exclusiveMinimum ?? -1e6;
-  const max = schema.maximum ?? schema.exclusiveMaximum ?? 1e6;
+  const min = Number(schema.minimum ?? schema.exclusiveMinimum ?? -1e6);
+  const max = Number(schema.maximum ?? schema.exclusiveMaximum ?? 1e6);
   return fc.oneof(
     fc.double({ min, max, noNaN: true }),
     fc.constantFrom(min, max, (min + max) / 2),
@@ -149,7 +149,7 @@ function spoilOne([value, pick, evil]: [unknown, number, unknown]): unknown {
   const target = copy as Record<string, unknown>;
   const key = keys[pick % Math.max(1, keys.length)];
   if (key === undefined || pick % 7 === 0) target[`extra${pick % 3}`] = evil;
-  else if (pick % 7 === 1) delete target[key];
+  else if (pick % 7 === 1) Reflect.deleteProperty(target, key);
   else if (pick % 2 === 0) target[key] = evil;
   else target[key] = spoilOne([target[key], Math.floor(pick / 7), evil]);
   return copy;

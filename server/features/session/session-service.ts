@@ -7,7 +7,7 @@ import { transact } from '../../context/transact';
 import type { OpenContext } from '../../http/route';
 import { hasAdministrator } from '../people/people-service';
 import { readSettings } from '../settings/settings-service';
-import { demoAccounts } from './demo-accounts';
+import { demoAccounts } from '../../config/demo-accounts';
 
 /** Who is signed in here, and what the sign-in page needs to know. */
 export async function readSession(

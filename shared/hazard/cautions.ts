@@ -1,7 +1,18 @@
 import type { RuleSet } from './rule-sets';
 
-/** What every result carries. */
-export function cautionsOf({ edition, supersededBy }: RuleSet): string[] {
+const ofRuleSets = new Map<RuleSet, readonly string[]>();
+
+/** What every result carries. The list is shared by all results of a rule set. */
+export function cautionsOf(ruleSet: RuleSet): readonly string[] {
+  let cautions = ofRuleSets.get(ruleSet);
+  if (cautions === undefined) {
+    cautions = cautionsFor(ruleSet);
+    ofRuleSets.set(ruleSet, cautions);
+  }
+  return cautions;
+}
+
+function cautionsFor({ edition, supersededBy }: RuleSet): readonly string[] {
   const standing =
     supersededBy === undefined
       ? 'whether it is the one that binds your site is for you to know'

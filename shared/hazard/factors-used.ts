@@ -1,6 +1,6 @@
 import { breakTimeT2 } from './factors/break-time-t2';
 import { correctionFactorCE } from './factors/correction-factor-ce';
-import { factorRowAt, factorValue } from './factors/factor-value';
+import { factorValue } from './factors/factor-value';
 import { alphaMax, coneFactor, edgeS, gammaPh, tabulatedDuration } from './limits/row-reading';
 import type { LimitCandidate, LimitSituation } from './pulses/limit-candidates';
 import type { Factors } from './result';
@@ -8,26 +8,24 @@ import type { RuleSet } from './rule-sets';
 
 /** The numbers that a limit was read with; only those that were used. */
 export function factorsOf(
-  { factors: table, pulseTrain }: RuleSet,
+  { pulseTrain }: RuleSet,
   { point }: LimitSituation,
   { row, durationS, rule, sharedBy, train }: LimitCandidate,
 ): Factors {
   const used: Factors = {};
   const tabulatedS = tabulatedDuration(point, durationS);
-  for (const symbol of row.printed.factors ?? []) {
-    if (symbol === 'CE') {
-      used.alphaMaxMrad = alphaMax(point, tabulatedS);
-      used.CE = correctionFactorCE(point.source, used.alphaMaxMrad);
-    } else if (symbol !== 'T2^-1/4') {
-      const factor = factorRowAt(table[symbol], point.wavelengthNm);
-      used[symbol] = factor === undefined ? 1 : factorValue(factor, point.wavelengthNm);
-    }
+  for (const { symbol, row: factor } of row.factors) {
+    used[symbol] = factor === undefined ? 1 : factorValue(factor, point.wavelengthNm);
+  }
+  if (row.growsWithSource) {
+    used.alphaMaxMrad = alphaMax(point, tabulatedS);
+    used.CE = correctionFactorCE(point.source, used.alphaMaxMrad);
   }
   const isCounted = train !== undefined && pulseTrain.countedWithin === 'T2';
-  if (row.from === 'T2' || row.to === 'T2' || (isCounted && point.band.isRetinal)) {
+  if (row.hasT2 || row.printed.durationS.includes('T2') || (isCounted && point.band.isRetinal)) {
     used.T2S = breakTimeT2(point.source);
   }
-  if (row.from === 'T1' || row.to === 'T1') used.T1S = edgeS('T1', point);
+  if (row.printed.durationS.includes('T1')) used.T1S = edgeS('T1', point);
   if (
     row.mechanism === 'photochemical' &&
     point.band.isRetinal &&

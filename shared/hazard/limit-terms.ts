@@ -36,21 +36,20 @@ export function limitTerms(candidates: readonly LimitCandidate[]): LimitTerm[] {
 
 /** The largest sum of shares over all tissues: beams add up where they reach the same one. */
 export function largestTissueSum(beams: readonly (readonly TissueShare[])[]): number {
-  if (beams.length === 1) return largestRatio(beams[0] as readonly TissueShare[]);
   const sums = new Map<Tissue, number>();
   for (const shares of beams) {
-    const ofBeam = new Map<Tissue, number>();
-    for (const { tissue, ratio } of shares) {
-      ofBeam.set(tissue, Math.max(ratio, ofBeam.get(tissue) ?? 0));
+    for (const [tissue, ratio] of largestPerTissue(shares)) {
+      sums.set(tissue, (sums.get(tissue) ?? 0) + ratio);
     }
-    for (const [tissue, ratio] of ofBeam) sums.set(tissue, (sums.get(tissue) ?? 0) + ratio);
   }
   return Math.max(0, ...sums.values());
 }
 
-/** The largest share of a beam. */
-export function largestRatio(shares: readonly TissueShare[]): number {
-  let largest = 0;
-  for (const { ratio } of shares) if (ratio > largest) largest = ratio;
+/** What governs each tissue: the largest share of a beam. */
+export function largestPerTissue(shares: readonly TissueShare[]): Map<Tissue, number> {
+  const largest = new Map<Tissue, number>();
+  for (const { tissue, ratio } of shares) {
+    largest.set(tissue, Math.max(ratio, largest.get(tissue) ?? 0));
+  }
   return largest;
 }

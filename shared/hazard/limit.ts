@@ -1,5 +1,4 @@
 import { SMALL_SOURCE, type ApparentSource } from './factors/apparent-source';
-import { durationRowAt, durationValue } from './factors/factor-value';
 import type { PerAxis } from './case';
 import {
   bandAt,
@@ -9,6 +8,7 @@ import {
 } from './limits/compiled-rule-set';
 import {
   appliesAt,
+  limitingApertureM,
   radiantExposureLimit,
   rowsFor,
   tabulatedDuration,
@@ -78,19 +78,6 @@ export function exposureLimit(query: LimitQuery): LimitReading {
   return toReading(governing, point, query.durationS);
 }
 
-/** The limiting aperture of a row at a duration, mm. */
-export function limitingApertureMm(
-  row: CompiledRow,
-  point: ReadingPoint,
-  durationS: number,
-): number {
-  const rows = row.isAnteriorCap ? point.band.skinApertures : point.band.apertures;
-  const tabulatedS = tabulatedDuration(point, durationS);
-  const aperture = durationRowAt(rows, point.wavelengthNm, tabulatedS);
-  if (aperture === undefined) throw new RangeError('The tables hold no limiting aperture here.');
-  return durationValue(aperture, tabulatedS);
-}
-
 /** Where a limit is read. */
 export function pointAt(
   { ruleSet, eye, skin }: CompiledRuleSet,
@@ -133,7 +120,7 @@ function toReading(row: CompiledRow, point: ReadingPoint, durationS: number): Li
     mechanism: row.mechanism,
     radiantExposureJPerM2,
     irradianceWPerM2: radiantExposureJPerM2 / durationS,
-    limitingApertureMm: limitingApertureMm(row, point, durationS),
+    limitingApertureMm: limitingApertureM(row, point, durationS) * 1e3,
     row: row.printed,
   };
 }

@@ -140,7 +140,7 @@ export interface EvaluationResult {
   /** Left out of a bare evaluation. */
   steps?: Step[];
   warnings: Warning[];
-  cautions: string[];
+  cautions: readonly string[];
 }
 
 /** One thing that is wrong with a case. */

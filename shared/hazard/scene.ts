@@ -57,8 +57,10 @@ export function sceneOf(hazardCase: HazardCase): Scene {
 
 /** The same scene with the other growth of the beams. */
 export function withGrowth(scene: Scene, growth: BeamGrowth): Scene {
-  const beams = scene.beams.map(({ beam }) => sceneBeam(beam, scene.path, growth));
-  return { ...scene, model: { ...scene.model, growth }, beams };
+  const { hazardCase, rules, path, attenuationPerM, aid } = scene;
+  const beams = scene.beams.map(({ beam }) => sceneBeam(beam, path, growth));
+  const model = { growth, onAxis: scene.model.onAxis };
+  return { hazardCase, rules, path, model, attenuationPerM, aid, beams };
 }
 
 /** What decides the limits of a beam, whose source is seen at a distance and magnified. */
@@ -82,7 +84,7 @@ export function situationOf(
 
 /** Whether the angle of the source, and with it the limit, changes with distance. */
 export function hasSpot({ field }: SceneBeam): boolean {
-  return 'strength' in field && field.spotM > 0;
+  return field.kind === 'surface' && field.spotM > 0;
 }
 
 /** The source as it is seen at a distance. */
@@ -91,14 +93,14 @@ export function sourceAt(
   distanceM: number,
   magnification = 1,
 ): ApparentSource {
-  const seen = 'strength' in field && field.spotM > 0 ? spotSource(field, distanceM) : source;
+  const seen = field.kind === 'surface' && field.spotM > 0 ? spotSource(field, distanceM) : source;
   if (magnification === 1) return seen;
   return { xMrad: seen.xMrad * magnification, yMrad: seen.yMrad * magnification };
 }
 
 /** Where the worst accessible exposure is, m; a diffuse spot is searched from here on. */
 export function worstPlaceM({ field }: SceneBeam): number {
-  return 'strength' in field ? NEAREST_VIEW_M : Math.max(0, field.waistM);
+  return field.kind === 'surface' ? NEAREST_VIEW_M : Math.max(0, field.waistM);
 }
 
 /** Exposure averaged over an aperture, without air, in the terms of the emission. */
@@ -108,7 +110,7 @@ export function meanExposure(
   distanceM: number,
 ): number {
   const ofUnitPower =
-    'strength' in field
+    field.kind === 'surface'
       ? diffuseExposure(field, distanceM)
       : apertureMean(field, apertureM, distanceM);
   return timing.powerOrEnergy * ofUnitPower;
@@ -122,7 +124,7 @@ export function modelExposure(
   distanceM: number,
 ): number {
   const ofUnitPower =
-    'strength' in field
+    field.kind === 'surface'
       ? diffuseExposure(field, distanceM)
       : exposureOfUnitPower(field, onAxis, apertureM, distanceM);
   return timing.powerOrEnergy * ofUnitPower;

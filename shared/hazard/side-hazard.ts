@@ -38,9 +38,10 @@ export interface BeamHazard {
   readonly distanceM: number;
   /** Averaged over the aperture of the governing candidate: W/m² for CW, J/m² otherwise. */
   readonly exposure: number;
+  /** What is left of the beam in air. */
+  readonly transmission: number;
   /** Exposure over limit. */
   readonly ratio: number;
-  readonly shares: readonly TissueShare[];
 }
 
 /** All beams of a scene against the limits of one side. */
@@ -79,21 +80,43 @@ function beamHazard(
   transmission: number,
 ): BeamHazard {
   const candidates = limitCandidates(situation);
-  const shares: TissueShare[] = [];
   let governing = candidates[0] as LimitCandidate;
   let exposure = 0;
   let ratio = -1;
   for (const candidate of candidates) {
     const ofCandidate = meanExposure(sceneBeam, candidate.apertureM, distanceM) * transmission;
     const ratioOfCandidate = ofCandidate / comparableLimit(candidate);
-    shares.push({ tissue: candidate.row.tissue, ratio: ratioOfCandidate });
     if (ratioOfCandidate > ratio) {
       governing = candidate;
       exposure = ofCandidate;
       ratio = ratioOfCandidate;
     }
   }
-  return { sceneBeam, situation, candidates, governing, distanceM, exposure, ratio, shares };
+  return {
+    sceneBeam,
+    situation,
+    candidates,
+    governing,
+    distanceM,
+    exposure,
+    transmission,
+    ratio,
+  };
+}
+
+/** How much of each tissue's limits the beam uses up, candidate by candidate. */
+export function sharesOf({
+  sceneBeam,
+  candidates,
+  distanceM,
+  transmission,
+}: BeamHazard): TissueShare[] {
+  return candidates.map((candidate) => ({
+    tissue: candidate.row.tissue,
+    ratio:
+      (meanExposure(sceneBeam, candidate.apertureM, distanceM) * transmission) /
+      comparableLimit(candidate),
+  }));
 }
 
 function worstBeamHazard(scene: Scene, side: Side, sceneBeam: SceneBeam): BeamHazard {
@@ -144,12 +167,12 @@ function worstDistanceOfSpot(scene: Scene, side: Side, sceneBeam: SceneBeam): nu
 export function reachOfSide(scene: Scene, side: Side, worst: readonly BeamHazard[]): number {
   const { beams } = scene;
   const [only] = beams;
+  if (beams.length === 1 && only !== undefined && !hasSpot(only)) {
+    return reachOfBeam(scene, only, (worst[0] as BeamHazard).candidates, UNAIDED);
+  }
   const fixed = worst.map(({ sceneBeam, candidates }) =>
     hasSpot(sceneBeam) ? undefined : limitTerms(candidates),
   );
-  if (beams.length === 1 && only !== undefined && fixed[0] !== undefined) {
-    return reachOfBeam(scene, only, fixed[0], UNAIDED);
-  }
   const breakpoints = beams.flatMap((sceneBeam) => breakpointsOf(scene, side, sceneBeam, 1));
   return largestReach((distanceM) => {
     const shares = beams.map((sceneBeam, i) => {
@@ -164,11 +187,14 @@ export function reachOfSide(scene: Scene, side: Side, worst: readonly BeamHazard
 function reachOfBeam(
   scene: Scene,
   { field, timing }: SceneBeam,
-  terms: readonly LimitTerm[],
+  candidates: readonly LimitCandidate[],
   { gain, collectingApertureM }: AidedBeam,
 ): number {
   let farthest = 0;
-  for (const { apertureM, limit } of terms) {
+  for (const candidate of candidates) {
+    const { apertureM } = candidate;
+    const limit = comparableLimit(candidate);
+    if (isUndercut(candidate, limit, candidates)) continue;
     const distanceM = reach({
       field,
       onAxis: scene.model.onAxis,
@@ -182,11 +208,26 @@ function reachOfBeam(
   return farthest;
 }
 
+/** Whether another candidate over the same aperture allows less; it reaches farther then. */
+function isUndercut(
+  { apertureM }: LimitCandidate,
+  limit: number,
+  candidates: readonly LimitCandidate[],
+): boolean {
+  for (const other of candidates) {
+    if (other.apertureM === apertureM && comparableLimit(other) < limit) return true;
+  }
+  return false;
+}
+
 function aidedHazardDistance(scene: Scene): number {
   const { beams } = scene;
   const [only] = beams;
   if (beams.length === 1 && only !== undefined && !hasSpot(only)) {
-    return reachOfBeam(scene, only, aidedTerms(scene, only, 1), aidedBeam(scene, only));
+    const aided = aidedBeam(scene, only);
+    const source = sourceAt(only, 1, aided.magnification);
+    const candidates = limitCandidates(situationOf(scene, 'eye', only, source));
+    return reachOfBeam(scene, only, candidates, aided);
   }
   const breakpoints = beams.flatMap((sceneBeam) =>
     breakpointsOf(scene, 'eye', sceneBeam, aidedBeam(scene, sceneBeam).magnification),
@@ -249,9 +290,11 @@ export function aidedShares(
   });
 }
 
-/** Optical density of a set of beams: of the tissue where they add up most; 0 when below. */
+/** Optical density of all beams: of the tissue where they add up most; 0 when below. */
 export function combinedDensity(beams: readonly BeamHazard[]): number {
-  return opticalDensity(largestTissueSum(beams.map(({ shares }) => shares)));
+  const [only] = beams;
+  if (beams.length === 1 && only !== undefined) return opticalDensity(only.ratio);
+  return opticalDensity(largestTissueSum(beams.map(sharesOf)));
 }
 
 /** log10 of exposure over limit, 0 when below. */
@@ -268,5 +311,5 @@ function breakpointsOf(
 ): number[] {
   if (hasSpot(sceneBeam)) return spotBreakpoints(scene, side, sceneBeam, magnification);
   const { field } = sceneBeam;
-  return 'waistM' in field && field.waistM > 0 ? [field.waistM] : [];
+  return field.kind === 'beam' && field.waistM > 0 ? [field.waistM] : [];
 }

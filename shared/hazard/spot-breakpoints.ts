@@ -16,7 +16,7 @@ export function spotBreakpoints(
   magnification: number,
 ): number[] {
   const { field } = sceneBeam;
-  if (!('strength' in field) || side === 'skin') return [];
+  if (field.kind === 'beam' || side === 'skin') return [];
   const { spotM, cosine } = field;
   const axes = [1, cosine, (1 + cosine) / 2];
   return criticalAngles(scene, side, sceneBeam).flatMap((angleMrad) =>

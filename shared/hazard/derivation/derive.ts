@@ -6,7 +6,8 @@ import {
 } from '../photon';
 import type { Step } from '../result';
 import { hasSpot, type Scene } from '../scene';
-import { combinedDensity, type BeamHazard, type SideHazard } from '../side-hazard';
+import { largestPerTissue } from '../limit-terms';
+import { combinedDensity, sharesOf, type BeamHazard, type SideHazard } from '../side-hazard';
 import { writeAidedDistance, writeHazardDistance } from './distance-steps';
 import { ASKED, writeExposure, writeField, writeSpot, WORST } from './exposure-steps';
 import { writeLimit } from './limit-steps';
@@ -86,12 +87,10 @@ function writeAt(writer: StepWriter, scene: Scene, hazard: BeamHazard): void {
 /** The density for all beams at once: of the tissue where exposure over limit adds up most. */
 function writeCombined(writer: StepWriter, hazards: readonly BeamHazard[], symbol: string): void {
   const sums = new Map<string, number[]>();
-  for (const { shares } of hazards) {
-    const largest = new Map<string, number>();
-    for (const { tissue, ratio } of shares) {
-      largest.set(tissue, Math.max(ratio, largest.get(tissue) ?? 0));
+  for (const hazard of hazards) {
+    for (const [tissue, ratio] of largestPerTissue(sharesOf(hazard))) {
+      sums.set(tissue, [...(sums.get(tissue) ?? []), ratio]);
     }
-    for (const [tissue, ratio] of largest) sums.set(tissue, [...(sums.get(tissue) ?? []), ratio]);
   }
   const names = [...sums].map(([tissue, ratios], i) => {
     const name = `S_${symbol}_${i + 1}`;

@@ -109,11 +109,11 @@ function writeClosedForm(
   const { sceneBeam } = hazard;
   const { field, timing } = sceneBeam;
   if (scene.attenuationPerM > 0 || hasSpot(sceneBeam)) return false;
-  if (!('strength' in field) && !field.isCircular) return false;
+  if (field.kind === 'beam' && !field.isCircular) return false;
   const candidate = farthestCandidate(scene, hazard, distanceM);
   const limit = writeLimitOf(writer, hazard, candidate);
   const emitted = timing.isPulsed ? 'Q' : 'Phi';
-  if ('strength' in field) {
+  if (field.kind === 'surface') {
     writer.write({
       symbol: 'r_H',
       what: 'Hazard distance: where the exposure equals the limit',
@@ -380,7 +380,7 @@ function writeModelExposure(
   }: { distanceM: number; distance: string; apertureM: number; isAided: boolean },
 ): string {
   const emitted = timing.isPulsed ? 'Q' : 'Phi';
-  if ('strength' in field) return `${emitted}*${diffuseFormula(field, distance)}`;
+  if (field.kind === 'surface') return `${emitted}*${diffuseFormula(field, distance)}`;
   writeWidths(writer, field, distanceM, distance);
   if (model.onAxis === 'peak') {
     const area = field.isCircular ? 'D^2' : 'D_x*D_y';

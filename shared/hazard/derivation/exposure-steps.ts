@@ -41,7 +41,7 @@ export const ASKED: Place = {
 export function writeField(writer: StepWriter, path: Path, sceneBeam: SceneBeam): void {
   const { field, timing } = sceneBeam;
   writer.know(timing.isPulsed ? 'Q' : 'Phi', timing.powerOrEnergy);
-  if (!('strength' in field)) {
+  if (field.kind === 'beam') {
     writeShape(writer, path, sceneBeam, field);
   } else if (path.kind === 'diffuse') {
     writer.know('rho', path.reflectance);
@@ -111,7 +111,7 @@ export function writeMeanExposure(
 ): string {
   const { field, timing } = sceneBeam;
   const emitted = timing.isPulsed ? 'Q' : 'Phi';
-  if ('strength' in field) return `${emitted}*${diffuseFormula(field, distance)}`;
+  if (field.kind === 'surface') return `${emitted}*${diffuseFormula(field, distance)}`;
   writeFractionAt(writer, field, distanceM, distance, apertureM);
   return `${emitted}*eta/(pi*D_f^2/4)`;
 }

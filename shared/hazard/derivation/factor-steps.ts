@@ -1,10 +1,11 @@
 import { ALPHA_MIN_MRAD, isExtended, meanInside } from '../factors/apparent-source';
 import { breakTimeT2, T2_LARGEST_MRAD } from '../factors/break-time-t2';
 import { correctionFactorCE } from '../factors/correction-factor-ce';
-import { durationRowAt, factorRowAt, factorValue } from '../factors/factor-value';
+import { durationRowAt, factorValue } from '../factors/factor-value';
+import type { PrintedFactor } from '../limits/compiled-rule-set';
 import { alphaMax, coneFactor, gammaPh, tabulatedDuration } from '../limits/row-reading';
 import type { LimitCandidate, LimitSituation } from '../pulses/limit-candidates';
-import type { DurationRow, FactorRow, FactorSymbol } from '../rule-sets/limit-table';
+import type { DurationRow, FactorRow } from '../rule-sets/limit-table';
 import type { RuleSet } from '../rule-sets/rule-set';
 import type { StepWriter } from './step-writer';
 
@@ -17,12 +18,10 @@ export function writeFactors(
 ): void {
   const { row } = candidate;
   const { symbols } = ruleSet.factors;
-  for (const symbol of row.printed.factors ?? []) {
-    if (symbol === 'CE') writeCE(writer, ruleSet, situation, candidate);
-    else if (symbol !== 'T2^-1/4') writeWavelengthFactor(writer, ruleSet, situation, symbol);
-  }
-  if (row.hasT2 || row.from === 'T2' || row.to === 'T2') writeT2(writer, ruleSet, situation);
-  if (row.from === 'T1' || row.to === 'T1') {
+  for (const factor of row.factors) writeWavelengthFactor(writer, ruleSet, situation, factor);
+  if (row.growsWithSource) writeCE(writer, ruleSet, situation, candidate);
+  if (row.hasT2 || row.printed.durationS.includes('T2')) writeT2(writer, ruleSet, situation);
+  if (row.printed.durationS.includes('T1')) {
     writeFactorRow(writer, situation.point.band.t1, situation, {
       symbol: symbols.T1,
       what: 'Break time',
@@ -45,9 +44,8 @@ function writeWavelengthFactor(
   writer: StepWriter,
   { factors }: RuleSet,
   situation: LimitSituation,
-  symbol: Exclude<FactorSymbol, 'CE' | 'T2^-1/4'>,
+  { symbol, row }: PrintedFactor,
 ): void {
-  const row = factorRowAt(factors[symbol], situation.point.wavelengthNm);
   if (row !== undefined) {
     const draft = { symbol: factors.symbols[symbol], what: FACTORS[symbol], unit: '1' };
     writeFactorRow(writer, row, situation, draft);
@@ -103,7 +101,7 @@ function writeDurationRow(
   durationS: number,
   draft: { symbol: string; what: string; value: number; unit: string },
 ): void {
-  const row = durationRowAt(rows, rows[0]?.wavelengthNm[0] ?? 0, durationS);
+  const row = durationRowAt(rows, durationS);
   if (row === undefined) return;
   writer.know('t', durationS);
   writer.write({ ...draft, formula: printDurationRow(row), source: row.source });

@@ -60,15 +60,18 @@ function writeGoverning(
   candidates: readonly LimitCandidate[],
   governing: LimitCandidate,
 ): void {
-  const index = candidates.indexOf(governing) + 1;
+  const name = (candidate: LimitCandidate) => `H_${candidates.indexOf(candidate) + 1}`;
   const isOneAperture = candidates.every(({ apertureM }) => apertureM === governing.apertureM);
-  const names = candidates.map((_, i) => `H_${i + 1}`).join(',');
+  const others = candidates.filter((candidate) => candidate !== governing).map(name);
   writer.write({
     symbol: 'H_MPE',
     what: isOneAperture
       ? 'The governing limit is the smallest'
       : 'The governing limit: of limits averaged over apertures of their own, the one whose exposure exceeds it most',
-    formula: isOneAperture && candidates.length > 1 ? `min(${names})` : `H_${index}`,
+    formula:
+      isOneAperture && others.length > 0
+        ? `min(${[name(governing), ...others].join(',')})`
+        : name(governing),
     value: governing.limit,
     unit: 'J/m2',
     source: 'engine:reading',
@@ -90,9 +93,8 @@ export function writeAperture(
   { point }: LimitSituation,
   { row, durationS }: LimitCandidate,
 ): void {
-  const rows = row.isAnteriorCap ? point.band.skinApertures : point.band.apertures;
   const tabulatedS = tabulatedDuration(point, durationS);
-  const aperture = durationRowAt(rows, point.wavelengthNm, tabulatedS);
+  const aperture = durationRowAt(row.apertures, tabulatedS);
   if (aperture === undefined) return;
   writer.know('t', tabulatedS);
   writer.write({

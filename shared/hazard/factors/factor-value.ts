@@ -24,22 +24,19 @@ export function factorValue(row: FactorRow, wavelengthNm: number): number {
   return (row.plus ?? 0) + row.coefficient * 10 ** exponent;
 }
 
-/** The row that holds at this wavelength and duration. The last duration band includes its end. */
+/** The row that holds at a duration. The last duration band includes its end. */
 export function durationRowAt(
   rows: readonly DurationRow[],
-  wavelengthNm: number,
   durationS: number,
 ): DurationRow | undefined {
-  let last: DurationRow | undefined;
-  for (const row of rows) {
-    if (!inBand(wavelengthNm, row.wavelengthNm)) continue;
-    if (durationS < row.durationS[1]) return row;
-    last = row;
-  }
-  return last;
+  for (const row of rows) if (durationS < row.durationS[1]) return row;
+  return rows.at(-1);
 }
 
 /** `coefficient × t^timeExponent`, the value of a row at a duration. */
-export function durationValue(row: DurationRow, durationS: number): number {
-  return row.coefficient * power(durationS, row.timeExponent ?? 0);
+export function durationValue(
+  { coefficient, timeExponent }: DurationRow,
+  durationS: number,
+): number {
+  return timeExponent === undefined ? coefficient : coefficient * power(durationS, timeExponent);
 }

@@ -2,6 +2,7 @@ import type { Beam, BeamGrowth, BeamProfile, Path, PerAxis } from '../case';
 
 /** A beam along its path, in meters and radians, with 1/e widths of a Gaussian. */
 export interface BeamShape {
+  readonly kind: 'beam';
   /** Width at distance 0. */
   readonly dx: number;
   readonly dy: number;
@@ -84,6 +85,7 @@ function fiberDivergence(
 /** A beam from a point: both growths are the same. */
 function cone([phix, phiy]: readonly [number, number], profile: BeamProfile): BeamShape {
   return {
+    kind: 'beam',
     dx: 0,
     dy: 0,
     phix,
@@ -99,6 +101,7 @@ function directBeam(beam: Beam, growth: BeamGrowth): BeamShape {
   const [dx, dy] = oneOverEWidths(beam, beam.diameterMm ?? 0);
   const [phix, phiy] = oneOverEWidths(beam, beam.divergenceMrad ?? 0);
   return {
+    kind: 'beam',
     dx: dx * 1e-3,
     dy: dy * 1e-3,
     phix: phix * 1e-3,

@@ -3,6 +3,7 @@ import type { ApparentSource } from '../factors/apparent-source';
 
 /** A matt surface that sends light back, in meters. */
 export interface DiffuseField {
+  readonly kind: 'surface';
   /** Radiance of unit power over the spot's area, times the cosine of the viewing angle, 1/sr. */
   readonly strength: number;
   /** Width of the lit spot; 0 when it is far smaller than any distance. */
@@ -17,6 +18,7 @@ export const NEAREST_VIEW_M = 0.1;
 export function diffuseField(path: DiffusePath): DiffuseField {
   const cosine = Math.cos((path.angleDeg * Math.PI) / 180);
   return {
+    kind: 'surface',
     strength: (path.reflectance * cosine) / Math.PI,
     spotM: (path.spotMm ?? 0) * 1e-3,
     cosine,

@@ -21,7 +21,8 @@ export interface ReachQuery {
 export function reach(query: ReachQuery): number {
   const { field } = query;
   if (query.attenuationPerM > 0) return numericReach(query);
-  if ('strength' in field) return Math.sqrt((query.powerOrEnergy * field.strength) / query.limit);
+  if (field.kind === 'surface')
+    return Math.sqrt((query.powerOrEnergy * field.strength) / query.limit);
   return field.isCircular ? circularReach(query, field) : numericReach(query);
 }
 
@@ -60,10 +61,10 @@ function circularReach(query: ReachQuery, shape: BeamShape): number {
 function numericReach(query: ReachQuery): number {
   const { field, onAxis, apertureM, powerOrEnergy, limit, attenuationPerM } = query;
   const ofUnitPower = (distanceM: number) =>
-    'strength' in field
+    field.kind === 'surface'
       ? diffuseExposure(field, distanceM)
       : exposureOfUnitPower(field, onAxis, apertureM, distanceM);
   const ratio = (distanceM: number) =>
     (powerOrEnergy / limit) * ofUnitPower(distanceM) * Math.exp(-attenuationPerM * distanceM);
-  return largestReach(ratio, 'waistM' in field && field.waistM > 0 ? [field.waistM] : []);
+  return largestReach(ratio, field.kind === 'beam' && field.waistM > 0 ? [field.waistM] : []);
 }

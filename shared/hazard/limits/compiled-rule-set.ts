@@ -1,12 +1,13 @@
 import { inBand, factorRowAt } from '../factors/factor-value';
 import type { Mechanism, Side } from '../result';
 import type {
-  BandEdge,
+  Band,
   DurationRow,
   EyeRow,
   FactorRow,
   FactorSymbol,
   LimitRow,
+  Provenance,
   PulseTrainRow,
   Quantity,
   SkinReferenceRow,
@@ -22,8 +23,11 @@ export interface CompiledRow {
   /** The eye row that refers to this row of the skin. */
   readonly reference: SkinReferenceRow | undefined;
   readonly mechanism: Mechanism;
-  readonly from: BandEdge;
-  readonly to: BandEdge;
+  /** Edges of the band; NaN where they are named break times. */
+  readonly fromS: number;
+  readonly toS: number;
+  /** Whether an edge is a named break time, or the row holds for some sources only. */
+  readonly isConditional: boolean;
   /** The end of the last band belongs to it. */
   readonly endIncluded: boolean;
   /** Numbers of the SI: J/m² or W/m². */
@@ -32,14 +36,28 @@ export interface CompiledRow {
   readonly timeExponent: number;
   /** Printed as an irradiance, which a radiant exposure divides by its duration. */
   readonly isIrradiance: boolean;
-  /** The factors that depend on wavelength and are not constant in this band. */
-  readonly wavelengthFactors: readonly FactorRow[];
+  /** The printed factors that depend on wavelength; one without a row is 1. */
+  readonly factors: readonly PrintedFactor[];
+  /** Those that are not constant in this band; the constant ones are in the coefficient. */
+  readonly varyingFactors: readonly FactorRow[];
   readonly growsWithSource: boolean;
   readonly hasT2: boolean;
   /** Averaged over the skin's aperture although it is a limit of the eye. */
   readonly isAnteriorCap: boolean;
+  readonly apertures: readonly DurationRow[];
   readonly tissue: Tissue;
+  /** Whether the row, a factor or an aperture was written down with less than high certainty. */
+  readonly isUncertain: boolean;
 }
+
+/** A factor of a printed row with its own row in this wavelength band. */
+export interface PrintedFactor {
+  readonly symbol: WavelengthSymbol;
+  readonly row: FactorRow | undefined;
+}
+
+/** The factors that depend on wavelength alone. */
+export type WavelengthSymbol = Exclude<FactorSymbol, 'CE' | 'T2^-1/4'>;
 
 /** What adds up with what: exposures of one tissue do. */
 export type Tissue =
@@ -55,13 +73,13 @@ export interface WavelengthBand {
   readonly smallSource: readonly CompiledRow[];
   readonly extendedSource: readonly CompiledRow[];
   readonly isRetinal: boolean;
-  readonly apertures: readonly DurationRow[];
-  readonly skinApertures: readonly DurationRow[];
   readonly alphaMax: readonly DurationRow[];
   readonly gammaPh: readonly DurationRow[];
   readonly t1: FactorRow | undefined;
   readonly ti: FactorRow | undefined;
   readonly pulseTrain: readonly PulseTrainRow[];
+  /** Whether the rule for pulse trains was written down with less than high certainty. */
+  readonly hasUncertainTrain: boolean;
 }
 
 /** The tables of one side, cut at every wavelength where something changes. */
@@ -105,26 +123,44 @@ export function bandAt(table: CompiledTable, wavelengthNm: number): WavelengthBa
 
 function compileTable(ruleSet: RuleSet, side: Side): CompiledTable {
   const edgesNm = wavelengthEdges(ruleSet, side);
-  const bands = edgesNm.map((fromNm): WavelengthBand => {
-    const rows = (table: readonly EyeRow[]) => compileRows(ruleSet, side, table, fromNm);
-    const inside = <T extends { readonly wavelengthNm: LimitRow['wavelengthNm'] }>(
-      table: readonly T[],
-    ) => table.filter((row) => inBand(fromNm, row.wavelengthNm));
-    const { factors, apertures } = ruleSet;
-    return {
-      smallSource: rows(side === 'eye' ? ruleSet.eyeSmallSource : ruleSet.skin),
-      extendedSource: rows(side === 'eye' ? ruleSet.eyeExtendedSource : ruleSet.skin),
-      isRetinal: side === 'eye' && fromNm >= 400 && fromNm < 1400,
-      apertures: inside(apertures[side]),
-      skinApertures: inside(apertures.skin),
-      alphaMax: inside(factors.alphaMax),
-      gammaPh: inside(factors.gammaPh),
-      t1: factorRowAt(factors.T1, fromNm),
-      ti: factorRowAt(factors.Ti, fromNm),
-      pulseTrain: side === 'eye' || ruleSet.pulseTrain.coversSkin ? inside(factors.CP) : [],
-    };
-  });
+  const bands = edgesNm.map((fromNm) => compileBand(ruleSet, side, fromNm));
   return { edgesNm: Float64Array.from(edgesNm), bands };
+}
+
+function compileBand(ruleSet: RuleSet, side: Side, fromNm: number): WavelengthBand {
+  const { factors, eyeSmallSource, eyeExtendedSource, skin } = ruleSet;
+  const compile = (table: readonly EyeRow[]) =>
+    rowsInside(table, fromNm).flatMap((row) => compileRows(ruleSet, side, row, fromNm));
+  const smallSource = compile(side === 'eye' ? eyeSmallSource : skin);
+  const extendedSource = compile(side === 'eye' ? eyeExtendedSource : skin);
+  const band = {
+    smallSource,
+    extendedSource,
+    isRetinal: side === 'eye' && fromNm >= 400 && fromNm < 1400,
+    alphaMax: rowsInside(factors.alphaMax, fromNm),
+    gammaPh: rowsInside(factors.gammaPh, fromNm),
+    t1: factorRowAt(factors.T1, fromNm),
+    ti: factorRowAt(factors.Ti, fromNm),
+    pulseTrain:
+      side === 'eye' || ruleSet.pulseTrain.coversSkin ? rowsInside(factors.CP, fromNm) : [],
+  };
+  return {
+    ...band,
+    hasUncertainTrain:
+      band.pulseTrain.some(isUncertain) || (band.ti ? isUncertain(band.ti) : false),
+  };
+}
+
+/** Whether a row was written down with less than high certainty. */
+export function isUncertain({ confidence }: Provenance): boolean {
+  return confidence === 'memory-low' || confidence === 'memory-medium';
+}
+
+function rowsInside<T extends { readonly wavelengthNm: Band }>(
+  rows: readonly T[],
+  fromNm: number,
+): T[] {
+  return rows.filter((row) => inBand(fromNm, row.wavelengthNm));
 }
 
 /** Every wavelength at which a row, a factor or an aperture begins. */
@@ -146,22 +182,12 @@ function wavelengthEdges(ruleSet: RuleSet, side: Side): number[] {
   return [...edges].sort((a, b) => a - b);
 }
 
-function compileRows(
-  ruleSet: RuleSet,
-  side: Side,
-  table: readonly EyeRow[],
-  fromNm: number,
-): CompiledRow[] {
-  return table
-    .filter((row) => inBand(fromNm, row.wavelengthNm))
-    .flatMap((row) => {
-      if (!('sameAs' in row)) return [compileRow(ruleSet, side, row, fromNm)];
-      // A reference stands for every row of the skin within its own durations.
-      return ruleSet.skin
-        .filter((skinRow) => inBand(fromNm, skinRow.wavelengthNm))
-        .filter((skinRow) => Number(skinRow.durationS[1]) > Number(row.durationS[0]))
-        .map((skinRow) => compileRow(ruleSet, side, skinRow, fromNm, row));
-    });
+/** A row as it is printed; a reference to the skin stands for each row of the skin in its durations. */
+function compileRows(ruleSet: RuleSet, side: Side, row: EyeRow, fromNm: number): CompiledRow[] {
+  if (!('sameAs' in row)) return [compileRow(ruleSet, side, row, fromNm)];
+  return rowsInside(ruleSet.skin, fromNm)
+    .filter((skinRow) => Number(skinRow.durationS[1]) > Number(row.durationS[0]))
+    .map((skinRow) => compileRow(ruleSet, side, skinRow, fromNm, row));
 }
 
 const PER_M2: Record<Quantity, number> = { 'J/m2': 1, 'W/m2': 1, 'J/cm2': 1e4, 'W/cm2': 1e4 };
@@ -173,36 +199,39 @@ function compileRow(
   fromNm: number,
   reference?: SkinReferenceRow,
 ): CompiledRow {
-  const factors = row.factors ?? [];
-  const factorRows = factors.flatMap((symbol) => wavelengthFactorRow(ruleSet, symbol, fromNm));
+  const symbols = row.factors ?? [];
+  const factors = symbols
+    .filter((symbol) => symbol !== 'CE' && symbol !== 'T2^-1/4')
+    .map((symbol) => ({ symbol, row: factorRowAt(ruleSet.factors[symbol], fromNm) }));
+  const factorRows = factors.map((factor) => factor.row).filter((found) => found !== undefined);
   const constant = factorRows
     .filter((factor) => factor.decadesPerNm === undefined)
     .reduce((product, factor) => product * factor.coefficient, PER_M2[row.quantity]);
   const mechanism = reference?.mechanism ?? row.mechanism;
   const isAnteriorCap = reference !== undefined || row.aperture === 'skin';
+  const [fromS, toS] = row.durationS.map(Number) as [number, number];
+  const apertures = rowsInside(ruleSet.apertures[isAnteriorCap ? 'skin' : side], fromNm);
   return {
     printed: row,
     reference,
     mechanism,
-    from: row.durationS[0],
-    to: row.durationS[1],
-    endIncluded: row.durationS[1] === LONGEST_S,
+    fromS,
+    toS,
+    isConditional: Number.isNaN(fromS) || Number.isNaN(toS) || row.sourceMrad !== undefined,
+    endIncluded: toS === LONGEST_S,
     coefficient: row.coefficient * constant,
     plus: (row.plus ?? 0) * constant,
     timeExponent: row.timeExponent ?? 0,
     isIrradiance: row.quantity.startsWith('W'),
-    wavelengthFactors: factorRows.filter((factor) => factor.decadesPerNm !== undefined),
-    growsWithSource: factors.includes('CE'),
-    hasT2: factors.includes('T2^-1/4'),
+    factors,
+    varyingFactors: factorRows.filter((factor) => factor.decadesPerNm !== undefined),
+    growsWithSource: symbols.includes('CE'),
+    hasT2: symbols.includes('T2^-1/4'),
     isAnteriorCap,
+    apertures,
     tissue: tissueOf(side, fromNm, mechanism),
+    isUncertain: [row, reference ?? row, ...factorRows, ...apertures].some(isUncertain),
   };
-}
-
-function wavelengthFactorRow(ruleSet: RuleSet, symbol: FactorSymbol, fromNm: number): FactorRow[] {
-  if (symbol === 'CE' || symbol === 'T2^-1/4') return [];
-  const row = factorRowAt(ruleSet.factors[symbol], fromNm);
-  return row === undefined ? [] : [row];
 }
 
 /** @source bgi-832:1 */

@@ -1,4 +1,9 @@
-import { isExtended, type ApparentSource } from '../factors/apparent-source';
+import {
+  isExtended,
+  plainMean,
+  SMALL_SOURCE,
+  type ApparentSource,
+} from '../factors/apparent-source';
 import { breakTimeT2 } from '../factors/break-time-t2';
 import { correctionFactorCE } from '../factors/correction-factor-ce';
 import { durationRowAt, durationValue, factorValue } from '../factors/factor-value';
@@ -30,15 +35,9 @@ export function rowsFor(point: ReadingPoint): readonly CompiledRow[] {
 
 /** Whether the row holds at a duration of the tables. */
 export function appliesAt(row: CompiledRow, point: ReadingPoint, durationS: number): boolean {
-  const { from, to } = row;
-  if (typeof from === 'number' && typeof to === 'number') {
-    const isInside = durationS >= from && (durationS < to || (row.endIncluded && durationS === to));
-    return (
-      isInside &&
-      (row.printed.sourceMrad === undefined || fitsSource(row.printed.sourceMrad, point))
-    );
-  }
-  return beginsBefore(from, point, durationS) && endsAfter(row, to, point, durationS);
+  if (row.isConditional) return conditionHolds(row, point, durationS);
+  if (durationS < row.fromS) return false;
+  return durationS < row.toS || (durationS === row.toS && row.endIncluded);
 }
 
 /**
@@ -53,13 +52,14 @@ export function radiantExposureLimit(
   const t = tabulatedDuration(point, durationS);
   let limit = row.coefficient * power(t, row.timeExponent) + row.plus;
   if (row.isIrradiance) limit *= t;
-  for (const factor of row.wavelengthFactors) limit *= factorValue(factor, point.wavelengthNm);
-  if (point.band.isRetinal) limit *= sourceFactor(row, point, t);
+  for (const factor of row.varyingFactors) limit *= factorValue(factor, point.wavelengthNm);
+  if (point.source !== SMALL_SOURCE) limit *= sourceFactor(row, point, t);
   return durationS < t ? (limit * durationS) / t : limit;
 }
 
 /** C_E, T_2 and the limiting cone of a retinal row; 1 for a small source. */
 function sourceFactor(row: CompiledRow, point: ReadingPoint, durationS: number): number {
+  if (!point.band.isRetinal) return 1;
   let factor = 1;
   if (row.growsWithSource) factor *= correctionFactorCE(point.source, alphaMax(point, durationS));
   if (row.hasT2) factor *= power(breakTimeT2(point.source), -0.25);
@@ -69,13 +69,13 @@ function sourceFactor(row: CompiledRow, point: ReadingPoint, durationS: number):
 
 /** α_max at a duration, mrad. */
 export function alphaMax(point: ReadingPoint, durationS: number): number {
-  const row = durationRowAt(point.band.alphaMax, point.wavelengthNm, durationS);
+  const row = durationRowAt(point.band.alphaMax, durationS);
   return row === undefined ? Infinity : durationValue(row, durationS);
 }
 
 /** γ_ph at a duration, mrad; infinite where the edition has none. */
 export function gammaPh(point: ReadingPoint, durationS: number): number {
-  const row = durationRowAt(point.band.gammaPh, point.wavelengthNm, durationS);
+  const row = durationRowAt(point.band.gammaPh, durationS);
   return row === undefined ? Infinity : durationValue(row, durationS);
 }
 
@@ -85,7 +85,6 @@ export function gammaPh(point: ReadingPoint, durationS: number): number {
  */
 export function coneFactor(point: ReadingPoint, durationS: number): number {
   const { xMrad, yMrad } = point.source;
-  if (xMrad === 0 && yMrad === 0) return 1;
   const gammaMrad = gammaPh(point, durationS);
   return Math.max(1, xMrad / gammaMrad) * Math.max(1, yMrad / gammaMrad);
 }
@@ -97,21 +96,31 @@ export function edgeS(edge: BandEdge, point: ReadingPoint): number {
   return point.band.t1 === undefined ? Infinity : factorValue(point.band.t1, point.wavelengthNm);
 }
 
-function beginsBefore(from: BandEdge, point: ReadingPoint, durationS: number): boolean {
-  return typeof from === 'number' ? durationS >= from : durationS > edgeS(from, point);
-}
-
-function endsAfter(
-  row: CompiledRow,
-  to: BandEdge,
-  point: ReadingPoint,
-  durationS: number,
-): boolean {
-  if (typeof to !== 'number') return durationS <= edgeS(to, point);
-  return durationS < to || (row.endIncluded && durationS === to);
+/** The same where an edge is a named break time, which belongs to the row that ends there. */
+function conditionHolds(row: CompiledRow, point: ReadingPoint, durationS: number): boolean {
+  const [from, to] = row.printed.durationS;
+  const hasBegun = typeof from === 'number' ? durationS >= from : durationS > edgeS(from, point);
+  const hasNotEnded =
+    typeof to === 'number'
+      ? durationS < to || (row.endIncluded && durationS === to)
+      : durationS <= edgeS(to, point);
+  const { sourceMrad } = row.printed;
+  return hasBegun && hasNotEnded && (sourceMrad === undefined || fitsSource(sourceMrad, point));
 }
 
 function fitsSource([above, below]: Band, { source }: ReadingPoint): boolean {
-  const alphaMrad = (source.xMrad + source.yMrad) / 2;
+  const alphaMrad = plainMean(source);
   return alphaMrad > above && alphaMrad < below;
+}
+
+/** The limiting aperture of a row at a duration, m. */
+export function limitingApertureM(
+  { apertures }: CompiledRow,
+  point: ReadingPoint,
+  durationS: number,
+): number {
+  const tabulatedS = tabulatedDuration(point, durationS);
+  const aperture = durationRowAt(apertures, tabulatedS);
+  if (aperture === undefined) throw new RangeError('The tables hold no limiting aperture here.');
+  return durationValue(aperture, tabulatedS) * 1e-3;
 }

@@ -1,19 +1,12 @@
-import type { PerAxis } from '../case';
+import type { Beam, PerAxis } from '../case';
 import { checkEmission } from './check-emission';
-import type { FieldCheck, Fields, NumberRange } from './field-check';
-
-/** What the path uses of a beam. The rest may be left out and is ignored when given. */
-export interface CaseContext {
-  readonly usesDiameter: boolean;
-  readonly usesDivergence: boolean;
-  readonly isDirect: boolean;
-  /** The width criterion counts although the beam's own diameter does not. */
-  readonly usesWidth?: boolean;
-}
+import type { UsedOfBeam } from './check-path';
+import type { FieldCheck, NumberRange } from './field-check';
 
 const MOST_BEAMS = 64;
+const BEAMS_ALLOWED = `a list of 1 to ${MOST_BEAMS} beams`;
 
-const BEAM_FIELDS = [
+const BEAM_FIELDS = new Set([
   'label',
   'wavelengthNm',
   'emission',
@@ -24,7 +17,9 @@ const BEAM_FIELDS = [
   'sourceMrad',
   'waistDistanceM',
   'm2',
-] as const;
+]);
+
+type BeamFields = Partial<Record<keyof Beam, unknown>>;
 
 const WAVELENGTH: NumberRange = {
   isInside: (value) => value >= 180 && value <= 1e6,
@@ -34,88 +29,76 @@ const WAVELENGTH: NumberRange = {
 const ANY_NUMBER: NumberRange = { isInside: () => true, allowed: 'a finite number' };
 
 /** Checks every beam. */
-export function checkBeams(check: FieldCheck, beams: unknown, context: CaseContext): void {
-  const allowed = `a list of 1 to ${MOST_BEAMS} beams`;
+export function checkBeams(check: FieldCheck, beams: unknown, used: UsedOfBeam): void {
   if (!Array.isArray(beams)) {
-    check.fail(
-      'beams',
-      beams === undefined ? 'beams is missing.' : 'beams must be a list.',
-      allowed,
-    );
+    const what = beams === undefined ? 'beams is missing.' : 'beams must be a list.';
+    check.fail('beams', what, BEAMS_ALLOWED);
   } else if (beams.length < 1 || beams.length > MOST_BEAMS) {
-    check.fail('beams', `There are ${beams.length} beams.`, allowed);
+    check.fail('beams', `There are ${beams.length} beams.`, BEAMS_ALLOWED);
   } else {
-    for (let i = 0; i < beams.length; i++) checkBeam(check, beams[i], `beams[${i}]`, context);
+    const list = check.within('beams');
+    for (let i = 0; i < beams.length; i++) checkBeam(list.within(i), beams[i], used);
   }
 }
 
-function checkBeam(check: FieldCheck, beam: unknown, path: string, context: CaseContext): void {
-  const fields = check.object(beam, path, BEAM_FIELDS);
+function checkBeam(check: FieldCheck, beam: unknown, used: UsedOfBeam): void {
+  const fields: BeamFields | undefined = check.object(beam, BEAM_FIELDS);
   if (fields === undefined) return;
-  if (fields['label'] !== undefined) check.text(fields['label'], `${path}.label`);
-  checkWavelength(check, fields['wavelengthNm'], `${path}.wavelengthNm`);
-  checkEmission(check, fields['emission'], `${path}.emission`);
-  if (fields['sourceMrad'] !== undefined) check.perAxis(fields['sourceMrad'], `${path}.sourceMrad`);
-  checkGeometry(check, fields, path, context);
+  if (fields.label !== undefined) check.text(fields.label, 'label');
+  checkWavelength(check, fields.wavelengthNm);
+  checkEmission(check.within('emission'), fields.emission);
+  if (fields.sourceMrad !== undefined) check.perAxis(fields.sourceMrad, 'sourceMrad');
+  checkGeometry(check, fields, used);
 }
 
-function checkWavelength(check: FieldCheck, wavelengthNm: unknown, path: string): void {
+function checkWavelength(check: FieldCheck, wavelengthNm: unknown): void {
   if (typeof wavelengthNm === 'object' && wavelengthNm !== null && !Array.isArray(wavelengthNm)) {
     check.fail(
-      path,
+      'wavelengthNm',
       'A wavelength range is not evaluated by this version.',
       `a single wavelength: ${WAVELENGTH.allowed}`,
     );
-  } else check.number(wavelengthNm, path, WAVELENGTH);
-}
-
-function checkGeometry(
-  check: FieldCheck,
-  fields: Fields,
-  path: string,
-  { usesDiameter, usesDivergence, isDirect, usesWidth = usesDiameter }: CaseContext,
-): void {
-  const { diameterMm, divergenceMrad, waistDistanceM } = fields;
-  const isDiameter = usesDiameter && check.perAxis(diameterMm, `${path}.diameterMm`);
-  const isDivergence = usesDivergence && check.perAxis(divergenceMrad, `${path}.divergenceMrad`);
-  if (usesWidth) checkProfile(check, fields, path);
-  if (!isDirect) return;
-  if (fields['m2'] !== undefined) check.number(fields['m2'], `${path}.m2`);
-  if (waistDistanceM === undefined) return;
-  if (!check.number(waistDistanceM, `${path}.waistDistanceM`, ANY_NUMBER)) return;
-  if (isDiameter && isDivergence) {
-    checkWaist(check, diameterMm as PerAxis, divergenceMrad as PerAxis, {
-      waistDistanceM,
-      path: `${path}.waistDistanceM`,
-    });
+  } else {
+    check.number(wavelengthNm, 'wavelengthNm', WAVELENGTH);
   }
 }
 
-function checkProfile(check: FieldCheck, fields: Fields, path: string): void {
-  const profile = fields['profile'];
-  check.choice(profile, `${path}.profile`, ['gaussian', 'top-hat'], 'There is no such profile');
-  if (profile !== 'top-hat' || fields['width'] !== undefined) {
-    check.choice(fields['width'], `${path}.width`, ['1/e', '1/e2'], 'There is no such width');
+function checkGeometry(check: FieldCheck, fields: BeamFields, used: UsedOfBeam): void {
+  const { diameterMm, divergenceMrad, waistDistanceM, profile, width, m2 } = fields;
+  const isDiameter = used.diameter && check.perAxis(diameterMm, 'diameterMm');
+  const isDivergence = used.divergence && check.perAxis(divergenceMrad, 'divergenceMrad');
+  if (used.profile) {
+    check.choice(profile, 'profile', ['gaussian', 'top-hat']);
+    if (profile !== 'top-hat' || width !== undefined) check.choice(width, 'width', ['1/e', '1/e2']);
+  }
+  if (!used.waist) return;
+  if (m2 !== undefined) check.number(m2, 'm2');
+  if (waistDistanceM === undefined) return;
+  const isWaist = check.number(waistDistanceM, 'waistDistanceM', ANY_NUMBER);
+  if (isWaist && isDiameter && isDivergence) {
+    checkWaist(check, waistDistanceM, diameterMm as PerAxis, divergenceMrad as PerAxis);
   }
 }
 
 /** A beam that narrows from the exit to its waist must have some width left there. */
 function checkWaist(
   check: FieldCheck,
+  waistDistanceM: number,
   diameterMm: PerAxis,
   divergenceMrad: PerAxis,
-  { waistDistanceM, path }: { waistDistanceM: number; path: string },
 ): void {
-  for (const axis of [0, 1] as const) {
+  const farthestM = Math.min(reachOfWaist(0), reachOfWaist(1));
+  if (Math.abs(waistDistanceM) < farthestM) return;
+  const printed = Number(farthestM.toPrecision(6));
+  check.fail(
+    'waistDistanceM',
+    `With this divergence the beam has no positive waist ${waistDistanceM} m from the exit.`,
+    `between -${printed} and ${printed} m, edges excluded (diameter / divergence)`,
+  );
+
+  function reachOfWaist(axis: 0 | 1): number {
     const d = typeof diameterMm === 'number' ? diameterMm : diameterMm[axis];
     const phi = typeof divergenceMrad === 'number' ? divergenceMrad : divergenceMrad[axis];
-    if (Math.abs(waistDistanceM) * phi < d) continue;
-    const farthestM = Number((d / phi).toPrecision(6));
-    check.fail(
-      path,
-      `With this divergence the beam has no positive waist ${waistDistanceM} m from the exit.`,
-      `between -${farthestM} and ${farthestM} m, edges excluded (diameter / divergence)`,
-    );
-    return;
+    return d / phi;
   }
 }

@@ -3,11 +3,11 @@ import { plainMean } from '../factors/apparent-source';
 import { breakTimeT2 } from '../factors/break-time-t2';
 import { factorValue } from '../factors/factor-value';
 import { pulseTrainFactor, pulseTrainRow } from '../factors/pulse-train-factor';
-import { limitingApertureMm } from '../limit';
 import type { CompiledRow } from '../limits/compiled-rule-set';
 import {
   alphaMax,
   appliesAt,
+  limitingApertureM,
   radiantExposureLimit,
   rowsFor,
   tabulatedDuration,
@@ -25,8 +25,6 @@ export interface LimitCandidate {
   readonly row: CompiledRow;
   /** The duration that the row is read at, s. */
   readonly durationS: number;
-  /** The row at that duration, J/m². */
-  readonly rowLimit: number;
   /** What the candidate allows: CW over the exposure, pulsed per pulse, J/m². */
   readonly limit: number;
   readonly apertureM: number;
@@ -92,14 +90,12 @@ function addRows(
   const tabulatedS = tabulatedDuration(point, durationS);
   for (const row of rowsFor(point)) {
     if (!appliesAt(row, point, tabulatedS)) continue;
-    const rowLimit = radiantExposureLimit(row, point, durationS);
-    const apertureM = limitingApertureMm(row, point, durationS) * 1e-3;
-    const limit = rowLimit / pulses.count;
+    const apertureM = limitingApertureM(row, point, durationS);
+    const limit = radiantExposureLimit(row, point, durationS) / pulses.count;
     candidates.push({
       rule,
       row,
       durationS,
-      rowLimit,
       limit,
       apertureM,
       sharedBy: pulses.count,
@@ -109,7 +105,10 @@ function addRows(
   }
 }
 
-/** The pulse-train rule: thermal limits only, each pulse or group of pulses times C_P. */
+/**
+ * The pulse-train rule: every pulse, or group of pulses that counts as one, times C_P. It covers
+ * thermal limits; those of the front of the eye in 1200–1400 nm are not reduced by C_P.
+ */
 function addTrain(
   candidates: LimitCandidate[],
   situation: LimitSituation,
@@ -124,19 +123,18 @@ function addTrain(
   const train = trainReading(situation, group.durationS, group.durationS <= tiS, pulses);
   const tabulatedS = tabulatedDuration(point, group.durationS);
   for (const row of rowsFor(point)) {
-    if (row.mechanism === 'photochemical' || row.isAnteriorCap) continue;
-    if (!appliesAt(row, point, tabulatedS)) continue;
+    if (row.mechanism === 'photochemical' || !appliesAt(row, point, tabulatedS)) continue;
     const rowLimit = radiantExposureLimit(row, point, group.durationS);
+    const factor = row.isAnteriorCap ? 1 : train.factor;
     candidates.push({
       rule: 'pulse-train',
       row,
       durationS: group.durationS,
-      rowLimit,
-      limit: (rowLimit * train.factor) / group.pulses,
-      apertureM: limitingApertureMm(row, point, group.durationS) * 1e-3,
+      limit: (rowLimit * factor) / group.pulses,
+      apertureM: limitingApertureM(row, point, group.durationS),
       sharedBy: group.pulses,
       sharedBySymbol: group.pulses > 1 ? 'n_g' : '',
-      train,
+      train: row.isAnteriorCap ? { factor, pulses, branch: undefined } : train,
     });
   }
 }

@@ -30,6 +30,12 @@ export const quantitySchema = z.strictObject({
 });
 export type Quantity = z.infer<typeof quantitySchema>;
 
+/** A wavelength in nm, where limits exist. */
+const wavelengthSchema = quantitySchema.refine(
+  ({ value }) => !Number.isFinite(value) || (value >= 180 && value <= 1e6),
+  { path: ['value'], error: 'A wavelength is from 180 to 1,000,000 nm.' },
+);
+
 export const EMISSION_MODES = [
   'cw',
   'single',
@@ -46,8 +52,8 @@ export const emissionSchema = z.strictObject({
   id: idSchema,
   label: shortText(60).optional(),
   /** From 180 to 1,000,000 nm. With `wavelengthToNm`: the lower end of a tuning range. */
-  wavelengthNm: quantitySchema,
-  wavelengthToNm: quantitySchema.optional(),
+  wavelengthNm: wavelengthSchema,
+  wavelengthToNm: wavelengthSchema.optional(),
   mode: z.enum(EMISSION_MODES),
   /** CW: power. Pulsed: mean power, in place of the pulse energy. Maximum, not usual, value. */
   powerW: quantitySchema.optional(),

@@ -198,7 +198,7 @@ describe('the life cycle', () => {
     const release = { event: 'release', reason: 'The records are complete.' };
     const refused = (await stepLaser(team.lso, id, release, 409)) as unknown as { reasons: string[] };
     expect(refused.reasons).toContainEqual(expect.stringMatching(/^The waiver has ended/));
-    const again = await stepLaser(team.lso, id, { event: 're-evaluate', reason: 'Needs one.' }, 400);
+    const again = await stepLaser(team.lso, id, { event: 're-evaluate', reason: 'Short.' }, 400);
     expect(again).toMatchObject({ name: 'invalid-input' });
     const step = { event: 're-evaluate', reason: 'An evaluation is needed.' };
     expect((await stepLaser(team.lso, id, step)).block).toBeUndefined();

@@ -3,7 +3,7 @@ import type { ImportError, LaserImport } from '@shared/model/laser-imports';
 import { type Emission, type LaserInput, laserInputSchema, type Quantity } from '@shared/model/lasers';
 import type { Provenance } from '@shared/model/common';
 
-import { pathText } from '../../http/field-errors';
+import { pathText, wordsFor } from '../../http/field-errors';
 import { readCell } from './import-cell';
 import { COLUMNS, type Column, type FoundColumn } from './import-columns';
 
@@ -108,13 +108,12 @@ function planLaser(group: readonly ReadRow[], notes: Notes): PlannedLaser[] {
       if (!line) notes.errors.push(missing(row, 'wavelength_nm', 'A further row of a laser is a line: its wavelength is missing.', '532 nm'));
     }
   }
-  const parsed = laserInputSchema.safeParse({
-    homeBuilt: false,
-    mobile: false,
-    ...first.laser,
-    emissions: lines.map(({ line }, index) => ({ ...line, id: `line-${index + 1}` })),
-    emissionSets: [],
-  });
+  const blank = { maker: '', model: '', homeBuilt: false, mobile: false, emissionSets: [] };
+  const emissions = lines.map(({ line }, index) => ({ ...line, id: `line-${index + 1}` }));
+  const parsed = laserInputSchema.safeParse(
+    { ...blank, ...first.laser, emissions },
+    { error: wordsFor },
+  );
   const rows = group.map(({ row }) => row);
   if (!parsed.success) {
     for (const issue of parsed.error.issues) {

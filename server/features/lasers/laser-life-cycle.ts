@@ -67,7 +67,10 @@ export const LASER_WORKFLOW: Workflow<
   hasPart,
   guards: guards(),
   moveTo: (ctx, subject, to) =>
-    mark(ctx, subject, { state: to, stateSince: ctx.now.toISOString() }),
+    // A new laser is stored in its first state at once.
+    subject.isNew && subject.laser.state === to
+      ? Promise.resolve({ ...subject, isNew: false })
+      : mark(ctx, subject, { state: to, stateSince: ctx.now.toISOString() }),
   effects: {
     quarantine: (ctx, subject) => mark(ctx, subject, { quarantine: true }),
     'under-waiver': (ctx, subject, { reason, waiver }) => {

@@ -63,16 +63,16 @@ export function findLaserIdByTag(tx: Tx, tag: string): Promise<{ id: string } | 
 
 /** The next free number of tags like L-43. */
 export async function nextTag(tx: Tx): Promise<string> {
-  const { last } = await tx
+  const last = await tx
     .selectFrom('lasers')
-    .select(
-      sql<number>`coalesce(max(cast(substr(lasers.tag, 3) as integer)), 0)`.as('last'),
-    )
+    .select('lasers.tag_key')
     .where('lasers.tag_key', '>=', 'l-0000000000')
     .where('lasers.tag_key', '<=', 'l-9999999999')
-    .where(sql<boolean>`substr(lasers.tag, 3) not glob '*[^0-9]*'`)
-    .executeTakeFirstOrThrow();
-  return `L-${String(last + 1).padStart(2, '0')}`;
+    .where(sql<boolean>`substr(lasers.tag_key, 3) not glob '*[^0-9]*'`)
+    .orderBy('lasers.tag_key', 'desc')
+    .executeTakeFirst();
+  const number = Number(last?.tag_key.slice(2) ?? 0) + 1;
+  return `L-${String(number).padStart(2, '0')}`;
 }
 
 export interface NewLaser {

@@ -40,7 +40,7 @@ import {
   updateLaserMarks,
 } from './laser-repository';
 import { hashOfInputs, refreshStanding, requireLaser, siteToday } from './laser-standing-service';
-import { moveLaser } from './laser-transition-service';
+import { enterRegister, moveLaser } from './laser-transition-service';
 import { laserRow, laserView } from './laser-view';
 
 type Entrance = Extract<LaserEvent, 'register' | 'declare-found' | 'request-purchase'>;
@@ -103,7 +103,7 @@ export async function storeLaser(
   await insertLaser(ctx.tx, { id, tag, input, area, state, createdBy: ctx.actor.id, at });
   await addPlace(ctx.tx, { laserId: id, areaId: area?.id ?? null, at });
   if (input.disposal) await updateLaserMarks(ctx.tx, id, { disposalAskedBy: ctx.actor.id, at });
-  return moveLaser(ctx, await requireLaser(ctx, id), { event: by, input: {}, isNew: true });
+  return enterRegister(ctx, await requireLaser(ctx, id), by);
 }
 
 /** What would keep this laser from being entered: for a dry run. Nothing is stored. */

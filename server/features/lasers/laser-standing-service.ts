@@ -55,6 +55,19 @@ export async function laserSubject(
   };
 }
 
+/** As `laserSubject` for a laser that was just stored: nothing hangs on it yet. */
+export async function newLaserSubject(ctx: Dated, laser: LaserRecord): Promise<LaserSubject> {
+  const today = await siteToday(ctx);
+  const none = { photos: 0, inputsEqualSealed: false, hasCurrentEvaluation: false };
+  return { laser, today, ...none, isNew: true };
+}
+
+/** The attention of a laser whose evaluations have not changed. */
+export async function refreshAttention(ctx: Dated, laser: LaserRecord): Promise<void> {
+  const rank = attentionRank(laser, await siteToday(ctx));
+  await updateLaserStanding(ctx.tx, laser.id, { ...laser, attentionRank: rank });
+}
+
 /** Writes what follows for the laser from its evaluations and from the date: reach, attention. */
 export async function refreshStanding(ctx: Dated, laserId: string): Promise<void> {
   const laser = await requireLaser(ctx, laserId);

@@ -6,25 +6,43 @@ import { transition } from '../../workflow/transition';
 import { LASER_WORKFLOW, type LaserStep } from './laser-life-cycle';
 import type { LaserRecord } from './laser-record';
 import { lasersWithEndedWaiver } from './laser-queries';
-import { laserSubject, refreshStanding, requireLaser, siteToday } from './laser-standing-service';
+import {
+  laserSubject,
+  newLaserSubject,
+  refreshAttention,
+  refreshStanding,
+  requireLaser,
+  siteToday,
+} from './laser-standing-service';
 
 /** Takes a laser one step further, by the person who acts or by the product itself. */
 export async function moveLaser(
   ctx: Context,
   laser: LaserRecord,
-  step: { event: LaserEvent; input: LaserStep; bySystem?: boolean; isNew?: boolean },
+  step: { event: LaserEvent; input: LaserStep; bySystem?: boolean },
 ): Promise<LaserRecord> {
-  const { isNew = false, ...rest } = step;
-  const subject = { ...(await laserSubject(ctx, laser)), isNew };
   const { waiver, area } = step.input;
   const changes = [
-    ...(isNew ? changesBetween(null, laser.input) : []),
     ...(waiver ? [{ field: 'waiver', before: laser.waiver, after: waiver }] : []),
     ...(area ? [{ field: 'areaId', before: laser.area?.id ?? null, after: area.id }] : []),
   ];
-  await transition(ctx, LASER_WORKFLOW, { subject, changes, ...rest });
+  const subject = await laserSubject(ctx, laser);
+  await transition(ctx, LASER_WORKFLOW, { subject, changes, ...step });
   await refreshStanding(ctx, laser.id);
   return requireLaser(ctx, laser.id);
+}
+
+/** The first step of a laser that was just stored, with the whole record in its audit entry. */
+export async function enterRegister(
+  ctx: Context,
+  laser: LaserRecord,
+  event: LaserEvent,
+): Promise<LaserRecord> {
+  const subject = await newLaserSubject(ctx, laser);
+  const changes = changesBetween(null, laser.input);
+  const moved = await transition(ctx, LASER_WORKFLOW, { subject, event, changes, input: {} });
+  await refreshAttention(ctx, moved.laser);
+  return moved.laser;
 }
 
 /** Lasers in use under a waiver that ended before `today`. */

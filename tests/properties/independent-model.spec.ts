@@ -1,8 +1,9 @@
 import { describe, expect, it } from 'vitest';
 
+import { HazardModel, type Compared } from '../support/decimal-model/model';
 import { modelNumbers } from '../support/decimal-model/numbers';
 import { disagreements } from '../support/agreement';
-import { engineNumbers } from '../support/engine-numbers';
+import { engineNumbers, resultOf } from '../support/engine-numbers';
 import { RULE_SET_IDS } from '../support/decimal-model/rows';
 import { drawCases } from '../support/random-cases';
 import { SIX_CASES } from '../support/six-cases';
@@ -20,6 +21,43 @@ describe(`engine and independent decimal model agree (seed ${SEED})`, () => {
       return different.length > 0 ? [{ drawn: JSON.stringify(drawn), different }] : [];
     });
     expect(found).toEqual([]);
+  });
+});
+
+/** A train whose pulses keep their own limit says nothing beside the single pulse. */
+function addsNothing({ candidate }: Compared, all: readonly Compared[]): boolean {
+  return (
+    candidate.rule === 'pulse-train' &&
+    all.some(
+      (other) =>
+        other.candidate.rule === 'single-pulse' && other.candidate.limit.eq(candidate.limit),
+    )
+  );
+}
+
+describe(`the engine considers every limit that the model finds (seed ${SEED})`, () => {
+  it.each(['eye', 'skin'] as const)('%s', (side) => {
+    let found = 0;
+    for (const drawn of CASES.slice(0, 150)) {
+      if (drawn.path?.kind === 'diffuse') continue;
+      const perBeam = new HazardModel(drawn).evaluate(side).perBeam;
+      const result = resultOf(drawn)[side].perBeam;
+      perBeam.forEach(({ all }, i) => {
+        for (const compared of all.filter((one) => !addsNothing(one, all))) {
+          const { rule, mechanism, apertureMm, limit } = compared.candidate;
+          const match = result[i]!.mpe.candidates!.some(
+            (own) =>
+              own.rule === rule &&
+              own.mechanism === mechanism &&
+              apertureMm.div(own.limitingApertureMm).sub(1).abs().lt(1e-12) &&
+              limit.div(own.value).sub(1).abs().lt(1e-12),
+          );
+          expect(match, `${rule} ${mechanism} ${limit} of ${JSON.stringify(drawn)}`).toBe(true);
+          found++;
+        }
+      });
+    }
+    expect(found).toBeGreaterThan(200);
   });
 });
 

@@ -217,7 +217,7 @@ export class HazardModel {
     ]);
     const ladder: Dec[] = [];
     const top = maxOf(steps).mul(1.1);
-    for (let r = spotM.div(100); r.lt(top); r = r.mul(1.12)) ladder.push(r);
+    for (let r = spotM.div(100); r.lt(top); r = r.mul(1.3)) ladder.push(r);
     return [...ladder, ...sides, top].sort((a, b) => a.cmp(b));
   }
 

@@ -41,9 +41,10 @@ export function beamOf(
   const notes: Notes = { conversions: [], assumptions: [], errors: [] };
   const wavelengthNm = wavelengthOf(emission, atWavelengthNm, notes);
   const timing = timingOf(emission, notes);
-  const fiber = path.kind === 'direct' ? fiberOf(emission, notes) : undefined;
-  const kind = fiber ? 'fiber' : path.kind;
-  const shape = kind === 'direct' || kind === 'lens' ? shapeOf(emission, wavelengthNm, notes) : {};
+  const isFiberEnd = path.kind === 'direct' && emission.delivery !== 'beam';
+  const fiber = isFiberEnd ? fiberOf(emission, notes) : undefined;
+  const hasShape = path.kind === 'lens' || (path.kind === 'direct' && !isFiberEnd);
+  const shape = hasShape ? shapeOf(emission, wavelengthNm, notes) : {};
   if (notes.errors.length > 0 || !timing || wavelengthNm === undefined) {
     return { ok: false, errors: notes.errors };
   }
@@ -234,10 +235,9 @@ function pulseEnergyOf(
   return highest.energyJ;
 }
 
-/** The way out of a fiber, when the line leaves by one and no collimator follows. */
+/** The way out of the fiber by which the line leaves. */
 function fiberOf(emission: Emission, notes: Notes): Path | undefined {
   const { delivery, numericalAperture, modeFieldDiameterUm } = emission;
-  if (delivery === 'beam') return undefined;
   if (delivery === 'single-mode-fiber' && modeFieldDiameterUm) {
     return { kind: 'fiber', modeFieldDiameterUm: modeFieldDiameterUm.value };
   }

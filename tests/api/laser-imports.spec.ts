@@ -241,7 +241,7 @@ describe('saving', () => {
     expect(await countLasers()).toBe(before);
   });
 
-  it('takes 2,000 rows, shows its progress, and the register answers meanwhile', async () => {
+  it('takes 2,000 rows, shows its progress, and the register answers meanwhile', { timeout: 300_000 }, async () => {
     const before = await countLasers();
     const rows = Array.from({ length: 2000 }, (_, index) =>
       row({ tag: `B-${index}`, serial: `B${index}`, wavelength_nm: 400 + (index % 600) }),

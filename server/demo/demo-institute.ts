@@ -11,7 +11,7 @@ import { DEMO_AREAS } from './demo-areas';
 import { DEMO_PEOPLE, type DemoPerson, type DemoPersonId, DEPARTMENTS } from './demo-people';
 
 /** Days before today on which people and areas were recorded. */
-const FOUNDED_DAYS_AGO = 400;
+const FOUNDED_DAYS_AGO = 900;
 const DAY_MS = 24 * 60 * 60 * 1000;
 /** 08:30 UTC: within the working day of the site. */
 const MORNING_MS = 8.5 * 60 * 60 * 1000;

@@ -13,6 +13,7 @@ import { apiDescriptionRoutes } from './features/api-description/api-description
 import { AREAS_ROUTES } from './features/areas/areas-routes';
 import { EVALUATE_ROUTES } from './features/evaluate/evaluate-routes';
 import { AGEING } from './features/evaluations/evaluation-jobs';
+import { EVALUATION_REPORT_ROUTES } from './features/evaluations/evaluation-report-routes';
 import { EVALUATIONS_ROUTES } from './features/evaluations/evaluations-routes';
 import { HEALTH_ROUTES } from './features/health/health-routes';
 import { LASER_IMPORTS_ROUTES } from './features/laser-imports/laser-imports-routes';
@@ -44,6 +45,7 @@ export const ROUTES: readonly Route[] = withDescription([
   ...LASERS_ROUTES,
   ...LASER_IMPORTS_ROUTES,
   ...EVALUATIONS_ROUTES,
+  ...EVALUATION_REPORT_ROUTES,
   ...EVALUATE_ROUTES,
   ...TODAY_ROUTES,
 ]);

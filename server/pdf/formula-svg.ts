@@ -1,4 +1,4 @@
-import { type MathNode, parseInfix, symbolParts } from '../../shared/drawing/infix';
+import { type MathNode, parseInfix, symbolParts } from '@shared/drawing/infix';
 import {
   fencedBox,
   fractionBox,
@@ -67,7 +67,7 @@ function layout(node: MathNode, style: Style): MathBox {
   }
 }
 
-/** `5e-7` is printed 5 × 10⁻⁷; digits beyond the eighth are left to the page. */
+/** `5e-7` is printed 5 × 10⁻⁷. */
 function numberBox(text: string, style: Style): MathBox {
   const [mantissa = '', exponent] = shortNumber(text).split('e');
   const digits = textBox(mantissa, style.size);
@@ -81,11 +81,11 @@ function numberBox(text: string, style: Style): MathBox {
   return rowBox([digits, textBox('×', style.size), power], 0.14 * style.size);
 }
 
-/** At most eight significant digits: what a person can retype. */
+/** At most ten significant digits: what a person can retype. */
 export function shortNumber(text: string): string {
   const value = Number(text);
-  if (text.replace(/e.*$/i, '').replace(/\D/g, '').length <= 8) return text.toLowerCase();
-  return String(Number(value.toPrecision(8)));
+  if (text.replace(/e.*$/i, '').replace(/\D/g, '').length <= 10) return text.toLowerCase();
+  return String(Number(value.toPrecision(10)));
 }
 
 function symbolBox(base: string, sub: string | undefined, style: Style): MathBox {

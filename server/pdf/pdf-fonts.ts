@@ -1,7 +1,9 @@
-import { type FontMetrics, readFontMetrics } from './font-metrics';
-import { projectFile } from './project-file';
+import { join } from 'node:path';
 
-const file = (name: string) => projectFile('server', 'pdf', 'fonts', `${name}.ttf`);
+import { PACKAGE_ROOT } from '../config/package-root';
+import { type FontMetrics, readFontMetrics } from './font-metrics';
+
+const file = (name: string) => join(PACKAGE_ROOT, 'server', 'pdf', 'fonts', `${name}.ttf`);
 
 /** The faces of a document. Each family has its four styles, as pdfmake asks for them. */
 export const PDF_FONTS = {

@@ -22,11 +22,11 @@ export function stepValue({ value }: Pick<Step, 'value'>): string {
   return String(rounded).replace('-', '−');
 }
 
-/** A formula whose numbers have at most eight digits; all of them stay with the step itself. */
+/** A formula whose numbers have at most ten digits; all of them stay with the step itself. */
 export function shortened(formula: string): string {
   return formula.replace(/(?<![A-Za-z_\d.])\d+(?:\.\d+)?(?:e[+-]?\d+)?/gi, (number) => {
     const digits = number.replace(/e.*$/i, '').replace('.', '').replace(/^0+/, '');
-    return digits.length <= 8 ? number : String(Number(Number(number).toPrecision(8)));
+    return digits.length <= 10 ? number : String(Number(Number(number).toPrecision(10)));
   });
 }
 

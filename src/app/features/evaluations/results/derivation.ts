@@ -33,7 +33,7 @@ interface Group {
 export class Derivation {
   readonly view = input.required<ResultView>();
 
-  /** Numbers as the engine holds them, or to eight digits. */
+  /** Numbers as the engine holds them, or to ten digits. */
   protected readonly allDigits = signal(false);
   protected readonly groups = computed(() => this.groupsOf(this.view()));
 

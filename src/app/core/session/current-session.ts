@@ -18,6 +18,8 @@ export class CurrentSession {
   readonly site = computed(() => this.state()?.site ?? null);
   readonly demoAccounts = computed(() => this.state()?.demo?.accounts ?? null);
   readonly needsSetup = computed(() => this.state()?.needsSetup ?? false);
+  /** Seconds without a request after which the session ends. */
+  readonly idleTimeoutS = computed(() => this.state()?.idleTimeoutS ?? 0);
   /** Why the session could not be read, while it could not. */
   readonly problem = this.failure.asReadonly();
 

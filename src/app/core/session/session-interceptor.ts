@@ -1,17 +1,26 @@
-import { type HttpInterceptorFn, HttpXsrfTokenExtractor } from '@angular/common/http';
+import {
+  HttpEventType,
+  type HttpInterceptorFn,
+  HttpXsrfTokenExtractor,
+} from '@angular/common/http';
 import { inject } from '@angular/core';
-import { catchError, switchMap, throwError } from 'rxjs';
+import { catchError, switchMap, tap, throwError } from 'rxjs';
 
 import { ProblemError } from '../http/problem-error';
 import { ASKS_FOR_SESSION } from './session-api';
+import { SessionClock } from './session-clock';
 import { SessionRenewal } from './session-renewal';
 
 /** When the session has ended, asks for the password over the page and then sends again. */
 export const sessionInterceptor: HttpInterceptorFn = (request, next) => {
   if (request.context.get(ASKS_FOR_SESSION)) return next(request);
+  const clock = inject(SessionClock);
   const renewal = inject(SessionRenewal);
   const tokens = inject(HttpXsrfTokenExtractor);
   return next(request).pipe(
+    tap((event) => {
+      if (event.type === HttpEventType.Response) clock.noteAnswer();
+    }),
     catchError((error: unknown) => {
       if (!(error instanceof ProblemError && error.is('not-signed-in'))) {
         return throwError(() => error);

@@ -9,12 +9,14 @@ import {
   viewChild,
 } from '@angular/core';
 import { takeUntilDestroyed } from '@angular/core/rxjs-interop';
+import { MatButton } from '@angular/material/button';
 import { NavigationEnd, Router, RouterLink, RouterLinkActive, RouterOutlet } from '@angular/router';
 import { filter, skip } from 'rxjs';
 
 import { Icon } from '../../ui/icon/icon';
 import { ProblemPanel } from '../../ui/problem-panel/problem-panel';
 import { UnhandledProblem } from '../app-error-handler';
+import { SessionClock } from '../session/session-clock';
 import { SessionRenewal } from '../session/session-renewal';
 import { SessionExpired } from '../session/session-expired';
 import { LaserSearch } from './laser-search';
@@ -28,6 +30,7 @@ import { WordMark } from './word-mark';
   imports: [
     Icon,
     LaserSearch,
+    MatButton,
     ProblemPanel,
     RouterLink,
     RouterLinkActive,
@@ -46,6 +49,7 @@ export class Shell {
   private readonly injector = inject(Injector);
   protected readonly unhandled = inject(UnhandledProblem);
   protected readonly renewal = inject(SessionRenewal);
+  protected readonly clock = inject(SessionClock);
 
   private readonly search = viewChild.required(LaserSearch);
   private readonly main = viewChild.required<ElementRef<HTMLElement>>('main');

@@ -10,6 +10,7 @@ describe('time at the site', () => {
 
   it('keeps a local date as it is', () => {
     expect(siteDate('2026-12-01', 'America/New_York')).toBe('1 Dec 2026');
+    expect(siteDate('2026-09-01', 'America/New_York')).toBe('1 Sep 2026');
   });
 
   it('says the minute with its zone', () => {

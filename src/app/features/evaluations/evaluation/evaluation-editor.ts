@@ -26,7 +26,6 @@ import { switchMap } from 'rxjs';
 import { Control } from '../../../ui/field/control';
 import { Field } from '../../../ui/field/field';
 import { Icon } from '../../../ui/icon/icon';
-import { Quantity } from '../../../ui/quantity/quantity';
 import { VersionConflict } from '../../../ui/version-conflict/version-conflict';
 import { EvaluationsApi } from '../evaluations-api';
 import { sentencesByPath } from '../inputs/case-paths';
@@ -39,6 +38,7 @@ import {
 } from '../inputs/evaluation-form';
 import { formSignal } from '../inputs/form-signal';
 import { ScenarioFields } from '../inputs/scenario-fields';
+import { SituationList } from '../inputs/situation-list';
 import { typed } from '../inputs/typed-quantity';
 import { StepsPanel } from '../life-cycle/steps-panel';
 import { Announcement } from '../results/announcement';
@@ -59,12 +59,12 @@ import { type KeptOutcome, newSituation, proposalFor, situationOutcome } from '.
     Field,
     Icon,
     MatButton,
-    Quantity,
     ReactiveFormsModule,
     ResultFigures,
     ResultFold,
     ResultGrounds,
     ScenarioFields,
+    SituationList,
     StepsPanel,
     VersionConflict,
   ],
@@ -133,7 +133,7 @@ export class EvaluationEditor {
     this.value().scenarios.map(({ id, name, activity }) => ({
       id,
       name,
-      activity: ACTIVITY_WORDS[activity],
+      activity,
       outcome: this.outcomes().get(id)?.outcome,
     })),
   );

@@ -15,9 +15,9 @@ import type { Problem } from '@shared/model/problem';
 import { ACTIVITY_WORDS } from '@shared/text/hazard-words';
 
 import { LineSwatch } from '../../../ui/line-swatch/line-swatch';
-import { Quantity } from '../../../ui/quantity/quantity';
 import { CaseInputs } from '../inputs/case-inputs';
 import { LineFigures } from '../inputs/line-figures';
+import { SituationList } from '../inputs/situation-list';
 import { SignatureList } from '../life-cycle/signature-list';
 import { StepsPanel } from '../life-cycle/steps-panel';
 import { WhatChanged } from '../life-cycle/what-changed';
@@ -33,11 +33,11 @@ import { ResultGrounds } from '../results/result-grounds';
     CaseInputs,
     LineFigures,
     LineSwatch,
-    Quantity,
     ResultFigures,
     ResultFold,
     ResultGrounds,
     SignatureList,
+    SituationList,
     StepsPanel,
     WhatChanged,
   ],
@@ -68,6 +68,14 @@ export class EvaluationRecord {
       view: this.outcomes().get(scenario.id)?.view ?? null,
     })),
   );
+  protected readonly items = computed(() =>
+    this.evaluation().input.scenarios.map(({ id, name, activity }) => ({
+      id,
+      name,
+      activity,
+      outcome: this.outcomes().get(id),
+    })),
+  );
   protected readonly selected = computed(
     () =>
       this.situations().find(({ scenario }) => scenario.id === this.situation()) ??
@@ -81,9 +89,9 @@ export class EvaluationRecord {
     const lines = this.linesNow();
     const scenario = this.selected()?.scenario;
     if (!lines || !scenario) return null;
-    const known = scenario.emissionIds.filter((id) => lines.emissions.some((one) => one.id === id));
     const { ruleSet } = this.evaluation().input;
-    const scenarios = [{ ...scenario, emissionIds: known }];
+    const emissionIds = this.linesToday(scenario.emissionIds, lines);
+    const scenarios = [{ ...scenario, emissionIds }];
     const [answer] = evaluateScenarios(lines, { ruleSet, scenarios });
     return answer ? storedOutcome(answer) : null;
   });
@@ -120,4 +128,11 @@ export class EvaluationRecord {
       ] as const
     ).flatMap(([head, text]) => (text ? [{ head, text }] : []));
   });
+
+  /** A situation of all lines is one of all present lines; another keeps those that are left. */
+  private linesToday(ids: readonly string[], today: Evaluation['laserInputs']): string[] {
+    const now = today.emissions.map(({ id }) => id);
+    const coversAll = this.evaluation().laserInputs.emissions.every(({ id }) => ids.includes(id));
+    return coversAll ? now : ids.filter((id) => now.includes(id));
+  }
 }

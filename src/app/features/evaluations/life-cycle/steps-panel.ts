@@ -11,9 +11,11 @@ import {
   viewChild,
 } from '@angular/core';
 import { MatButton } from '@angular/material/button';
+import { ruleSetById } from '@shared/hazard/rule-sets';
 import type { Evaluation, EvaluationTransition } from '@shared/model/evaluations';
 import type { OfferedEvent } from '@shared/model/lasers';
 import type { Problem } from '@shared/model/problem';
+import { statementOf } from '@shared/text/statements';
 
 import { ConfirmDialog } from '../../../ui/confirm-dialog/confirm-dialog';
 import { Icon } from '../../../ui/icon/icon';
@@ -72,6 +74,13 @@ export class StepsPanel {
   protected readonly title = computed(() => {
     const event = this.chosen()?.event ?? this.others()[0]?.event ?? '';
     return TITLES[event] ?? 'Next step';
+  });
+  /** The server names the sentence of the next step; a withdrawal beside it has its own. */
+  protected readonly statement = computed(() => {
+    const { statement, number, laser, input } = this.evaluation();
+    if (this.chosen()?.event !== 'withdraw') return statement;
+    const { edition } = ruleSetById(input.ruleSet);
+    return statementOf('withdrawn', { number, tag: laser.tag, edition });
   });
   protected readonly reasons = computed(() => {
     const reasons = this.chosen()?.reasons ?? [];

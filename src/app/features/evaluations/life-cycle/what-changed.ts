@@ -24,13 +24,25 @@ interface Row {
 export class WhatChanged {
   readonly evaluation = input.required<Evaluation>();
 
-  protected readonly rows = computed<Row[]>(() => this.evaluation().whatChanged.map(rowOf));
+  protected readonly rows = computed<Row[]>(() => merged(this.evaluation().whatChanged.map(rowOf)));
   protected readonly heading = computed(() =>
     this.rows().some((row) => row.isWorse) ? 'What got worse' : 'What changed',
   );
   protected readonly severalScenarios = computed(
     () => new Set(this.rows().map((row) => row.scenario)).size > 1,
   );
+}
+
+/** The same change in several situations is told once. */
+function merged(rows: readonly Row[]): Row[] {
+  const byChange = new Map<string, Row>();
+  for (const row of rows) {
+    const key = JSON.stringify([row.what, row.sealed, row.today]);
+    const known = byChange.get(key);
+    const scenario = known ? `${known.scenario}, ${row.scenario}` : row.scenario;
+    byChange.set(key, { ...row, scenario });
+  }
+  return [...byChange.values()];
 }
 
 function rowOf(change: ResultChange): Row {

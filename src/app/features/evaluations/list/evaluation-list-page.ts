@@ -27,7 +27,7 @@ import { StateChip } from '../../../ui/state-chip/state-chip';
 import { TableState } from '../../../ui/table-state/table-state';
 import { EvaluationsApi } from '../evaluations-api';
 
-/** Every evaluation that one may read: what waits first. */
+/** Every evaluation that one may read, the last changed first. */
 @Component({
   selector: 'lm-evaluation-list-page',
   imports: [

@@ -1,6 +1,6 @@
 import { ChangeDetectionStrategy, Component, computed, input, signal } from '@angular/core';
 import type { Step } from '@shared/hazard/result';
-import { formatWavelength } from '@shared/model/quantity-format';
+import { formatWavelength, UNIT_SPACE } from '@shared/model/quantity-format';
 import { governingLine, type ResultView } from '@shared/model/result-view';
 import { shortened, stepUnit, stepValue } from '@shared/model/step-text';
 
@@ -61,9 +61,14 @@ export class Derivation {
       formula: digits(`${step.symbol} = ${step.formula}`),
       substituted: step.substituted === step.formula ? undefined : digits(step.substituted),
       value: this.allDigits() ? String(step.value) : stepValue(step),
-      unit: stepUnit(step),
+      unit: unitWithGap(step),
     };
   }
+}
+
+function unitWithGap(step: Step): string {
+  const unit = stepUnit(step);
+  return unit && UNIT_SPACE + unit;
 }
 
 function titleOf(view: ResultView, { side, beam }: Step): string {

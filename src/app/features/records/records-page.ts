@@ -2,18 +2,17 @@ import {
   ChangeDetectionStrategy,
   Component,
   computed,
-  effect,
   inject,
   input,
   linkedSignal,
   signal,
 } from '@angular/core';
 import { MatButton } from '@angular/material/button';
-import { ActivatedRoute, Router } from '@angular/router';
 import { addDays } from '@shared/model/local-date';
 import { RECORD_KINDS, type RecordKind, recordKindSchema } from '@shared/model/records';
 import { scopeOf } from '@shared/permissions/permissions';
 
+import { keepInAddress } from '../../core/paging/keep-in-address';
 import { KeysetList, PAGE_ROWS } from '../../core/paging/keyset-list';
 import { CurrentSession } from '../../core/session/current-session';
 import { InstantPipe } from '../../core/time/instant-pipe';
@@ -57,8 +56,6 @@ const DATE = /^\d{4}-\d{2}-\d{2}$/;
 })
 export class RecordsPage {
   private readonly api = inject(RecordsApi);
-  private readonly router = inject(Router);
-  private readonly route = inject(ActivatedRoute);
   private readonly session = inject(CurrentSession);
 
   readonly kind = input<string>();
@@ -114,16 +111,12 @@ export class RecordsPage {
   protected readonly checking = signal(false);
 
   constructor() {
-    // The address says what is shown; what is usual is left out.
-    effect(() => {
-      const filter = Object.entries(this.filter()).map(([name, value]) => [name, value || null]);
-      const rows = this.shown() > PAGE_ROWS ? this.shown() : null;
-      void this.router.navigate([], {
-        relativeTo: this.route,
-        queryParams: { ...Object.fromEntries(filter), rows },
-        replaceUrl: true,
-      });
-    });
+    keepInAddress(() => ({
+      ...Object.fromEntries(
+        Object.entries(this.filter()).map(([name, value]) => [name, value || null]),
+      ),
+      rows: this.shown() > PAGE_ROWS ? this.shown() : null,
+    }));
   }
 
   protected narrow(part: Partial<TrailFilter>): void {

@@ -6,6 +6,7 @@ import {
   input,
 } from '@angular/core';
 import { RouterLink } from '@angular/router';
+import { ROLE_WORDS } from '@shared/model/people';
 import type { AuditEntry } from '@shared/model/records';
 
 import { ChangeList } from '../change-list/change-list';
@@ -18,6 +19,8 @@ const LINKED: Readonly<Record<string, string>> = {
   area: '/areas',
   person: '/people',
 };
+
+const ROLES: Readonly<Record<string, string>> = ROLE_WORDS;
 
 /** One entry of the audit trail: who did what, and on request what changed. */
 @Component({
@@ -39,7 +42,8 @@ export class AuditEntryView {
   );
   protected readonly who = computed(() => {
     const { actorName, actorRole, actingFor } = this.entry();
-    return [actorName, actorRole, actingFor && `for ${actingFor}`].filter(Boolean).join(', ');
+    const role = ROLES[actorRole] ?? actorRole;
+    return [actorName, role, actingFor && `for ${actingFor}`].filter(Boolean).join(', ');
   });
   protected readonly states = computed(() => {
     const { fromState, toState, recordKind } = this.entry();

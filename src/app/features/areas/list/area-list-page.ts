@@ -2,15 +2,15 @@ import {
   ChangeDetectionStrategy,
   Component,
   computed,
-  effect,
   inject,
   input,
   linkedSignal,
 } from '@angular/core';
 import { MatButton } from '@angular/material/button';
-import { ActivatedRoute, Router, RouterLink } from '@angular/router';
+import { RouterLink } from '@angular/router';
 import { scopeOf } from '@shared/permissions/permissions';
 
+import { keepInAddress } from '../../../core/paging/keep-in-address';
 import { KeysetList, PAGE_ROWS } from '../../../core/paging/keyset-list';
 import { CurrentSession } from '../../../core/session/current-session';
 import { Icon } from '../../../ui/icon/icon';
@@ -30,8 +30,6 @@ import { AreasApi } from '../areas-api';
 })
 export class AreaListPage {
   private readonly api = inject(AreasApi);
-  private readonly router = inject(Router);
-  private readonly route = inject(ActivatedRoute);
   private readonly user = inject(CurrentSession).user;
 
   readonly q = input<string>();
@@ -51,15 +49,10 @@ export class AreaListPage {
   );
 
   constructor() {
-    // The address says what is shown; what is usual is left out.
-    effect(() => {
-      const rows = this.shown() > PAGE_ROWS ? this.shown() : null;
-      void this.router.navigate([], {
-        relativeTo: this.route,
-        queryParams: { q: this.search() || null, rows },
-        replaceUrl: true,
-      });
-    });
+    keepInAddress(() => ({
+      q: this.search() || null,
+      rows: this.shown() > PAGE_ROWS ? this.shown() : null,
+    }));
   }
 
   protected find(text: string): void {

@@ -65,7 +65,7 @@ export class LaserStaleReach {
       sealedEyeDistanceM: this.reach().eyeDistanceM,
     };
   });
-  protected readonly rows = computed(() => this.read().evaluation?.whatChanged.map(rowOf) ?? []);
+  protected readonly rows = computed(() => rowsOf(this.read().evaluation?.whatChanged ?? []));
   protected readonly inputs = computed(() => this.read().evaluation?.inputsChanged ?? []);
   protected readonly severalSituations = computed(
     () => (this.read().evaluation?.input.scenarios.length ?? 0) > 1,
@@ -78,6 +78,20 @@ function readOf(answer: Observable<Evaluation>): Observable<Read> {
     catchError((error: unknown) => of<Read>({ problem: asProblem(error) })),
     startWith(NOTHING_READ),
   );
+}
+
+/** The results of the whole first, then those of single lines; equal rows of situations as one. */
+function rowsOf(changes: readonly ResultChange[]) {
+  const merged = new Map<string, ResultChange>();
+  for (const change of changes) {
+    const key = JSON.stringify([change.what, change.sealed, change.today]);
+    const same = merged.get(key);
+    const scenario = same ? `${same.scenario}, ${change.scenario}` : change.scenario;
+    merged.set(key, { ...change, scenario });
+  }
+  const rows = [...merged.values()];
+  const isOfLine = ({ what }: ResultChange) => what.includes(': ');
+  return [...rows.filter((row) => !isOfLine(row)), ...rows.filter(isOfLine)].map(rowOf);
 }
 
 function rowOf(change: ResultChange) {

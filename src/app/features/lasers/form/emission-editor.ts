@@ -1,11 +1,20 @@
-import { ChangeDetectionStrategy, Component, computed, input, output } from '@angular/core';
+import {
+  ChangeDetectionStrategy,
+  Component,
+  computed,
+  input,
+  linkedSignal,
+  output,
+} from '@angular/core';
 import { toObservable, toSignal } from '@angular/core/rxjs-interop';
 import { ReactiveFormsModule } from '@angular/forms';
 import { MatButton } from '@angular/material/button';
 import { PROVENANCES, provenanceSchema } from '@shared/model/common';
 import { beamOf } from '@shared/model/emission-beam';
+import { emissionSummary } from '@shared/model/laser-summary';
 import {
   DELIVERIES,
+  type Emission,
   EMISSION_MODES,
   emissionSchema,
   WIDTH_CONVENTIONS,
@@ -76,9 +85,13 @@ export class EmissionEditor {
   readonly form = input.required<EmissionForm>();
   readonly index = input.required<number>();
 
+  /** Whether the fields are shown to begin with, or, in a long list, only the line's name. */
+  readonly isShown = input(true);
+
   readonly duplicated = output();
   readonly removed = output();
 
+  protected readonly isOpen = linkedSignal(() => this.isShown());
   protected readonly path = computed(() => `emissions[${this.index()}]`);
   protected readonly value = toSignal(
     toObservable(this.form).pipe(
@@ -90,6 +103,10 @@ export class EmissionEditor {
       ),
     ),
   );
+  protected readonly summary = computed(() => {
+    const emission = contractOf(this.value());
+    return emission ? emissionSummary(emission) : '';
+  });
   protected readonly swatch = computed(() => {
     const value = this.value();
     const wavelengthNm = value?.wavelengthNm.value?.value;
@@ -149,11 +166,15 @@ export class EmissionEditor {
   }
 }
 
+function contractOf(value: EmissionValue | undefined): Emission | undefined {
+  return value && emissionSchema.safeParse(filled(emissionFrom(value))).data;
+}
+
 function notesOf(value: EmissionValue | undefined): readonly string[] {
-  const emission = value && emissionSchema.safeParse(filled(emissionFrom(value)));
-  if (!emission?.success) return [];
-  const { wavelengthNm, wavelengthToNm } = emission.data;
-  const beam = beamOf(emission.data, wavelengthToNm && wavelengthNm.value);
+  const emission = contractOf(value);
+  if (!emission) return [];
+  const { wavelengthNm, wavelengthToNm } = emission;
+  const beam = beamOf(emission, wavelengthToNm && wavelengthNm.value);
   if (!beam.ok) return beam.errors.map(({ message }) => message);
   // Which wavelength of a tuning range counts is decided in the evaluation.
   const assumptions = beam.assumptions.filter((note) => !note.startsWith('Evaluated at'));

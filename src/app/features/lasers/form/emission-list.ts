@@ -24,6 +24,8 @@ export class EmissionList {
   private readonly fb = inject(NonNullableFormBuilder);
 
   readonly form = input.required<LaserForm>();
+  /** Something in the form needs correction, maybe in a line. */
+  readonly hasErrors = input(false);
 
   private readonly values = toSignal(
     toObservable(this.form).pipe(
@@ -34,6 +36,10 @@ export class EmissionList {
         ),
       ),
     ),
+  );
+  /** Lines that were there from the start; in a long list they show their names only. */
+  private readonly firstIds = computed(() =>
+    this.form().controls.emissions.controls.map(({ controls }) => controls.id.value),
   );
   /** The lines' names, for the sets; also what makes the view follow added and removed lines. */
   protected readonly lines = computed(() =>
@@ -88,6 +94,10 @@ export class EmissionList {
     const others = control.value.filter((one) => one !== id);
     control.setValue(isIn ? [...others, id] : others);
     control.markAsDirty();
+  }
+
+  protected isShown(id: string): boolean {
+    return this.hasErrors() || this.firstIds().length < 2 || !this.firstIds().includes(id);
   }
 
   private ids(): readonly string[] {

@@ -13,6 +13,7 @@ import { NonNullableFormBuilder, ReactiveFormsModule } from '@angular/forms';
 import { MatButton } from '@angular/material/button';
 import { Title } from '@angular/platform-browser';
 import { Router, RouterLink } from '@angular/router';
+import type { PersonRef } from '@shared/model/common';
 import { type Laser, type LaserInput, laserInputSchema } from '@shared/model/lasers';
 import { debounceTime, EMPTY, map, startWith, switchMap } from 'rxjs';
 
@@ -25,6 +26,7 @@ import type { HoldsUnsavedChanges } from '../../../core/unsaved/unsaved-changes-
 import { ProblemPanel } from '../../../ui/problem-panel/problem-panel';
 import { VersionConflict } from '../../../ui/version-conflict/version-conflict';
 import { areaResource } from '../../areas/areas-api';
+import { personResource } from '../../people/people-api';
 import { settingsResource } from '../../settings/settings-api';
 import { laserResource, LasersApi } from '../lasers-api';
 import { EmissionList } from './emission-list';
@@ -135,9 +137,11 @@ export class LaserFormPage implements HoldsUnsavedChanges {
     this.area.hasValue() ? this.area.value()?.wallDistanceM : undefined,
   );
   protected readonly areaOption = computed(() => {
-    const area = this.source()?.area;
+    const area = this.area.hasValue() ? this.area.value() : this.source()?.area;
     return area ? { id: area.id, name: area.code, note: area.name } : null;
   });
+  protected readonly supervisor = this.personOf('supervisorId', () => this.source()?.supervisor);
+  protected readonly alternate = this.personOf('alternateId', () => this.source()?.alternate);
   protected readonly conflict = computed(() => {
     const stored = this.save.stored();
     const form = this.form();
@@ -225,6 +229,17 @@ export class LaserFormPage implements HoldsUnsavedChanges {
     if (!form?.dirty || this.isSaved()) return;
     const draft: Beginning = { value: laserFormValue(form), version: this.beginning()?.version };
     this.drafts.write(this.draftName(), draft);
+  }
+
+  /** The name of a person that the form begins with, also when it begins with a draft. */
+  private personOf(name: 'supervisorId' | 'alternateId', stored: () => PersonRef | undefined) {
+    const person = personResource(
+      computed(() => {
+        const id = this.beginning()?.value.record[name];
+        return id && id !== stored()?.id ? id : undefined;
+      }),
+    );
+    return computed(() => (person.hasValue() ? person.value() : stored()) ?? null);
   }
 
   private draftName(): string {

@@ -48,7 +48,8 @@ export function previewOf(
   const worst = reachOf({ ruleSet, scenarios }, results);
   const warnings = results.flatMap(({ result }) =>
     isEvaluated(result)
-      ? result.warnings.map(({ text }) => text)
+      ? // How the growth model matters belongs to the evaluation.
+        result.warnings.filter(({ code }) => code !== 'growth-model').map(({ text }) => text)
       : result.errors.map(({ message }) => message),
   );
   return {

@@ -2,18 +2,18 @@ import {
   ChangeDetectionStrategy,
   Component,
   computed,
-  effect,
   inject,
   linkedSignal,
 } from '@angular/core';
 import { toSignal } from '@angular/core/rxjs-interop';
 import { MatButton } from '@angular/material/button';
 import { MatMenu, MatMenuItem, MatMenuTrigger } from '@angular/material/menu';
-import { ActivatedRoute, Router, RouterLink } from '@angular/router';
+import { ActivatedRoute, RouterLink } from '@angular/router';
 import { ruleSetById } from '@shared/hazard/rule-sets';
 import type { LaserFilter, LaserListQuery } from '@shared/model/lasers';
 import { scopeOf } from '@shared/permissions/permissions';
 
+import { keepInAddress } from '../../../core/paging/keep-in-address';
 import { KeysetList, PAGE_ROWS } from '../../../core/paging/keyset-list';
 import { CurrentSession } from '../../../core/session/current-session';
 import { CautionLine } from '../../../ui/caution-line/caution-line';
@@ -59,7 +59,6 @@ const SORT_WORDS: Readonly<Record<LaserListQuery['sort'], string>> = {
 })
 export class LaserListPage {
   private readonly api = inject(LasersApi);
-  private readonly router = inject(Router);
   private readonly route = inject(ActivatedRoute);
   private readonly user = inject(CurrentSession).user;
   private readonly settings = settingsResource();
@@ -96,14 +95,7 @@ export class LaserListPage {
   });
 
   constructor() {
-    // The address says what is shown; what is usual is left out.
-    effect(() => {
-      void this.router.navigate([], {
-        relativeTo: this.route,
-        queryParams: writeListState({ ...this.state(), rows: this.shown() }),
-        replaceUrl: true,
-      });
-    });
+    keepInAddress(() => writeListState({ ...this.state(), rows: this.shown() }));
   }
 
   protected narrow(filter: LaserFilter): void {

@@ -3,6 +3,7 @@ import { RouterLink } from '@angular/router';
 import type { LaserListQuery, LaserRow } from '@shared/model/lasers';
 import { formatOpticalDensity, formatQuantity } from '@shared/model/quantity-format';
 import { figure } from '@shared/text/figure';
+import { LASER_STATE_WORDS } from '@shared/workflow/laser-life-cycle';
 
 import { LineSwatch } from '../../../ui/line-swatch/line-swatch';
 import { ListTable } from '../../../ui/list-table/list-table';
@@ -32,6 +33,8 @@ export class LaserTable {
 
 function viewOf(row: LaserRow) {
   const { reach, attention } = row;
+  // The chip has said its own word.
+  const waits = attention.filter((words) => words !== LASER_STATE_WORDS[row.state]);
   const summaries = [...new Set(row.lines.map((line) => line.summary))];
   return {
     ...row,
@@ -44,9 +47,11 @@ function viewOf(row: LaserRow) {
     duration: reach ? `at ${figure(reach.eyeS, 's')}` : '',
     summary: summaries.length > 2 ? `${summaries.length} emissions` : summaries.join('; '),
     class: row.verifiedClass ?? row.declaredClass,
-    waits: attention[0],
-    more: attention.length > 1 ? `and ${attention.length - 1} more` : '',
-    allThatWaits: attention.join(' · '),
+    waits: waits[0],
+    more: waits.length > 1 ? `and ${waits.length - 1} more` : '',
+    allThatWaits: waits.join(' · '),
     isStale: reach?.state === 'stale',
+    // Chips that touch take less room; which lines are on together stands on the laser's page.
+    isMany: row.lines.length > 3,
   };
 }

@@ -12,7 +12,7 @@ const SHARED = ['shared', 'hazard'];
 const elements = [
   { type: 'hazard', pattern: 'shared/hazard' },
   { type: 'shared', pattern: 'shared/*', capture: ['area'] },
-  { type: 'server-data', mode: 'full', pattern: 'server/features/*/**/*-{repository,queries,table}.ts', capture: ['feature'] },
+  { type: 'server-data', mode: 'full', pattern: 'server/features/*/**/*-{repository,queries,record,table}.ts', capture: ['feature'] },
   { type: 'server-service', mode: 'full', pattern: 'server/features/*/**/*-service.ts', capture: ['feature'] },
   { type: 'server-feature', pattern: 'server/features/*', capture: ['feature'] },
   { type: 'server-demo', pattern: 'server/demo' },

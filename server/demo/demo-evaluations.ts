@@ -6,7 +6,7 @@ import {
   transitionEvaluation,
 } from '../features/evaluations/evaluation-service';
 import type { Chronicle, Hand } from './demo-chronicle';
-import type { DemoLaser } from './demo-lasers';
+import { type DemoLaser, lineId } from './demo-lasers';
 import type { DemoPersonId } from './demo-people';
 
 /** An evaluation under way in the seed: its present version is known from the last answer. */
@@ -36,7 +36,11 @@ export function noteEvaluation(chronicle: Chronicle, plan: EvaluationPlan): Demo
       input: written(begun.input, laser),
     });
   });
-  const step = (index: number, person: DemoPersonId, event: 'send-to-check' | 'confirm' | 'sign') => {
+  const step = (
+    index: number,
+    person: DemoPersonId,
+    event: 'send-to-check' | 'confirm' | 'sign',
+  ) => {
     if (steps < index) return;
     chronicle.note(daysAgo + (steps - index) * 2, async (by) => {
       evaluation.current = await take(by, person, { evaluation, event });
@@ -72,7 +76,8 @@ function current({ current: evaluation }: DemoEvaluation): Evaluation {
   return evaluation;
 }
 
-const MAKERS_WORK = 'Done by the maker’s engineer alone, with a service permit and an evaluation of its own.';
+const MAKERS_WORK =
+  'Done by the maker’s engineer alone, with a service permit and an evaluation of its own.';
 const ENCLOSED = 'The beam is enclosed: nobody can reach it.';
 
 /** The proposal as the author would finish it. */
@@ -91,7 +96,10 @@ function written(input: EvaluationInput, laser: DemoLaser): EvaluationInput {
           activity,
           reason: ENCLOSED,
         }))
-      : (['maintenance', 'service'] as const).map((activity) => ({ activity, reason: MAKERS_WORK })),
+      : (['maintenance', 'service'] as const).map((activity) => ({
+          activity,
+          reason: MAKERS_WORK,
+        })),
     assumptions: [...(laser.assumptions ?? [])],
     ...(laser.conditions ? { conditions: laser.conditions } : {}),
   };
@@ -99,7 +107,7 @@ function written(input: EvaluationInput, laser: DemoLaser): EvaluationInput {
 
 function tuned(scenario: Scenario, laser: DemoLaser): Scenario {
   const chosen = Object.entries(laser.atNm ?? {}).map(
-    ([index, nm]) => [laser.lines[Number(index)]!.id, nm] as const,
+    ([index, nm]) => [lineId(laser, Number(index)), nm] as const,
   );
   return {
     ...scenario,

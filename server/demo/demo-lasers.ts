@@ -72,7 +72,13 @@ function line(nm: number, mode: Emission['mode'], timing: Timing, beam: Beam): E
   const q = (value: number): Quantity => ({ value, source });
   const [dx, dy] = pair(beam.d);
   const [divX, divY] = pair(beam.div);
-  const numbers = { ...timing, diameterMm: dx, diameterYMm: dy, divergenceMrad: divX, divergenceYMrad: divY };
+  const numbers = {
+    ...timing,
+    diameterMm: dx,
+    diameterYMm: dy,
+    divergenceMrad: divX,
+    divergenceYMrad: divY,
+  };
   const quantities = Object.entries(numbers).flatMap(([field, value]) =>
     value === undefined ? [] : [[field, q(value)] as const],
   );
@@ -328,6 +334,13 @@ export const DEMO_LASERS: readonly DemoLaser[] = [
     lines: [cw(670, 4e-3, { d: 3, div: 1.5, source: L })],
     record: { ...classes('IIIa'), medium: 'semiconductor', labelAsFound: 'CLASS IIIa LASER PRODUCT, 670 nm, max 5 mW', declaredStandard: 'FDA, as on the label', purpose: 'Pointing of the telescope.' } },
 ];
+
+/** Id of a line by its place in the list. */
+export function lineId({ tag, lines }: DemoLaser, index: number): string {
+  const line = lines[index];
+  if (!line) throw new Error(`${tag} has no line ${index}.`);
+  return line.id;
+}
 
 /** The LSO's own class where it is not the declared one. */
 export const VERIFIED_CLASSES: Readonly<Record<string, LaserInput['verifiedClass']>> = {

@@ -1,11 +1,22 @@
 import type { LaserInput, LaserTransition } from '@shared/model/lasers';
 import { addDays, addMonths, daysBetween, localDateAt } from '@shared/model/local-date';
-import { type LaserEvent, type LaserGuard, NOT_RECORDED_GUARDS } from '@shared/workflow/laser-life-cycle';
+import {
+  type LaserEvent,
+  type LaserGuard,
+  NOT_RECORDED_GUARDS,
+} from '@shared/workflow/laser-life-cycle';
 
 import type { Context } from '../context/context';
-import { goStaleByReview, requireEvaluation } from '../features/evaluations/evaluation-staleness-service';
+import {
+  goStaleByReview,
+  requireEvaluation,
+} from '../features/evaluations/evaluation-staleness-service';
 import { changeLaser, storeLaser, transitionLaser } from '../features/lasers/laser-service';
-import { everyLaserId, refreshStanding, requireLaser } from '../features/lasers/laser-standing-service';
+import {
+  everyLaserId,
+  refreshStanding,
+  requireLaser,
+} from '../features/lasers/laser-standing-service';
 import { moveLaser } from '../features/lasers/laser-transition-service';
 import { readSettings } from '../features/settings/settings-service';
 import { DEMO_AREAS } from './demo-areas';
@@ -17,6 +28,7 @@ import {
   type DemoLaser,
   DOUBLED_LINE,
   HALVED_POWER_W,
+  lineId,
   VERIFIED_CLASSES,
   WRONG_DIVERGENCE_MRAD,
 } from './demo-lasers';
@@ -132,7 +144,11 @@ function noteEvaluated(site: Site, seeded: Seeded, index: number): void {
 const FIRST_VERSION_DAYS_AGO: Readonly<Record<string, number>> = { 'L-19': 330, 'L-24': 500 };
 
 /** The divergence of L-19 was wrong: withdrawn, corrected, evaluated again. */
-function noteCorrection({ institute, chronicle }: Site, seeded: Seeded, first: DemoEvaluation): void {
+function noteCorrection(
+  { institute, chronicle }: Site,
+  seeded: Seeded,
+  first: DemoEvaluation,
+): void {
   chronicle.note(256, async (by) => {
     const reason = 'The divergence was entered ten times too large: 14 instead of 1.4 mrad.';
     await take(by, 'P01', { evaluation: first, event: 'withdraw', reason });
@@ -147,7 +163,11 @@ function noteCorrection({ institute, chronicle }: Site, seeded: Seeded, first: D
 }
 
 /** What the calendar did once the review date of L-15 had passed. */
-function noteReviewPassed({ chronicle, nearReviewDaysAgo }: Site, first: DemoEvaluation, signed: number): void {
+function noteReviewPassed(
+  { chronicle, nearReviewDaysAgo }: Site,
+  first: DemoEvaluation,
+  signed: number,
+): void {
   // Signed this many days before what is reviewed in 11 days.
   const passedDaysAgo = signed - nearReviewDaysAgo - 11 - 1;
   chronicle.note(passedDaysAgo, async (by) => {
@@ -250,7 +270,11 @@ function withHalvedPower(input: LaserInput): LaserInput {
   return { ...input, emissions };
 }
 
-function planOf(seeded: Seeded, daysAgo: number, until: 'draft' | 'in-check' | 'checked' | 'approved') {
+function planOf(
+  seeded: Seeded,
+  daysAgo: number,
+  until: 'draft' | 'in-check' | 'checked' | 'approved',
+) {
   const { laser, supervisor: author, checker } = seeded;
   return { laser, laserId: () => seeded.id, author, checker, daysAgo, until };
 }
@@ -290,7 +314,7 @@ function inputFor(institute: Institute, laser: DemoLaser, isCorrected = false): 
     emissions,
     emissionSets: Object.entries(laser.sets ?? {}).map(([name, lines]) => ({
       name,
-      emissionIds: lines.map((index) => laser.lines[index]!.id),
+      emissionIds: lines.map((index) => lineId(laser, index)),
     })),
   };
 }

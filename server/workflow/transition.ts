@@ -85,7 +85,10 @@ export async function transition<Subject, Input extends StepInput>(
     ? row.actors.includes('system')
     : hasAnyPart(ctx, workflow, { subject: step.subject, row });
   if (!may) throw new NotAllowed(`"${row.label}" is for ${row.actors.map(wordsOf).join(', or ')}.`);
-  const reasons = failing(workflow, row, { subject: step.subject, question: { ctx, event, input } });
+  const reasons = failing(workflow, row, {
+    subject: step.subject,
+    question: { ctx, event, input },
+  });
   if (reasons.length > 0) throw new GuardFailed(reasons);
 
   let subject = await workflow.moveTo(ctx, step.subject, row.to);
@@ -100,7 +103,10 @@ export async function transition<Subject, Input extends StepInput>(
     reason: input.reason ?? input.comment ?? null,
     bySystem,
   });
-  for (const effect of row.effects) subject = await workflow.effects[effect]!(ctx, subject, input);
+  for (const name of row.effects) {
+    const effect = of(workflow.effects, name);
+    subject = await effect(ctx, subject, input);
+  }
   return subject;
 }
 
@@ -132,8 +138,15 @@ function failing<Subject, Input extends StepInput>(
   row: Row,
   { subject, question }: { subject: Subject; question: GuardQuestion<Input> },
 ): string[] {
-  const reasons = row.guards.flatMap((guard) => workflow.guards[guard]!(subject, question));
+  const reasons = row.guards.flatMap((name) => of(workflow.guards, name)(subject, question));
   return [...new Set(reasons)];
+}
+
+/** What stands behind a word of the table; the type of a workflow asks for every one. */
+function of<T>(acts: Readonly<Record<string, T>>, name: string): T {
+  const act = acts[name];
+  if (!act) throw new Error(`The workflow has nothing for "${name}".`);
+  return act;
 }
 
 const PART_WORDS: Readonly<Record<Part, string>> = {

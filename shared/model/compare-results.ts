@@ -28,8 +28,8 @@ export function compareResults(sealed: ResultSet, today: ResultSet): ResultChang
   const changes = [...ids].flatMap((id) => {
     const before = figuresOf(sealed, id);
     const after = figuresOf(today, id);
-    const scenario = (today.scenarios.find((one) => one.id === id) ??
-      sealed.scenarios.find((one) => one.id === id))!.name;
+    const scenario =
+      [...today.scenarios, ...sealed.scenarios].find((one) => one.id === id)?.name ?? id;
     return compareFigures(before, after).map((change) => ({ scenario, ...change }));
   });
   return changes.sort((a, b) => severity(b) - severity(a));
@@ -50,8 +50,14 @@ function compareFigures(
   return [...keys].flatMap((key) => {
     const sealed = before.get(key);
     const today = after.get(key);
-    const { what, unit } = (today ?? sealed)!;
-    const row = { what, unit, sealed: sealed?.value ?? null, today: today?.value ?? null };
+    const either = today ?? sealed;
+    if (!either) return [];
+    const row = {
+      what: either.what,
+      unit: either.unit,
+      sealed: sealed?.value ?? null,
+      today: today?.value ?? null,
+    };
     const direction = directionOf(sealed, today);
     return direction === 'same' ? [] : [{ ...row, direction }];
   });

@@ -117,7 +117,11 @@ describe('an unknown divergence', () => {
 });
 
 describe('pulses', () => {
-  const pulse = { pulseDurationS: q(35e-15), repetitionRateHz: q(1000), powerW: undefined } as const;
+  const pulse = {
+    pulseDurationS: q(35e-15),
+    repetitionRateHz: q(1000),
+    powerW: undefined,
+  } as const;
 
   it('take mean power and rate in place of the energy', () => {
     const found = beam({ mode: 'mode-locked', ...pulse, powerW: q(5) });
@@ -230,7 +234,10 @@ describe('what is missing', () => {
     ['single', ['pulseDurationS', 'pulseEnergyJ']],
     ['repetitive', ['pulseDurationS', 'repetitionRateHz', 'pulseEnergyJ']],
     ['mode-locked', ['pulseDurationS', 'repetitionRateHz', 'pulseEnergyJ']],
-    ['burst', ['pulseDurationS', 'pulsesPerBurst', 'intraBurstRateHz', 'burstRateHz', 'pulseEnergyJ']],
+    [
+      'burst',
+      ['pulseDurationS', 'pulsesPerBurst', 'intraBurstRateHz', 'burstRateHz', 'pulseEnergyJ'],
+    ],
     ['modulated', ['peakPowerW']],
   ] as const)('of a %s line is all named at once', (mode, fields) => {
     expect(errors({ mode, powerW: undefined })).toEqual(fields);

@@ -213,7 +213,8 @@ function pulseEnergyOf(
       `over ${figure(emission.pulseDurationS.value, 's')}.`;
     ways.push({ energyJ, conversion });
   }
-  const highest = ways.reduce((a, b) => (b.energyJ > a.energyJ * (1 + 1e-9) ? b : a), ways[0]!);
+  // Of equal figures the one that was given counts, not one that was converted.
+  const [highest] = [...ways].sort((a, b) => differs(a.energyJ, b.energyJ));
   if (!highest) {
     fail(
       notes,
@@ -233,6 +234,11 @@ function pulseEnergyOf(
     );
   }
   return highest.energyJ;
+}
+
+/** Descending; 0 when they differ by rounding only. */
+function differs(a: number, b: number): number {
+  return Math.abs(a - b) <= 1e-9 * Math.max(a, b) ? 0 : b - a;
 }
 
 /** The way out of the fiber by which the line leaves. */
@@ -328,7 +334,10 @@ function widthAt1e2(
   if (emission.profile === 'top-hat' || convention === '1/e2') return value;
   const isFwhm = convention === 'fwhm';
   const unit = which === 'diameter' ? 'mm' : 'mrad';
-  const at1e2 = map(value, isFwhm ? (width) => oneOverE2FromFwhm(width).value : oneOverE2FromOneOverE);
+  const at1e2 = map(
+    value,
+    isFwhm ? (width) => oneOverE2FromFwhm(width).value : oneOverE2FromOneOverE,
+  );
   const what = which === 'diameter' ? 'Diameter' : 'Divergence';
   const how = isFwhm ? 'at half maximum (FWHM)' : 'at 1/e';
   const factor = isFwhm ? '1.699' : '1.414';

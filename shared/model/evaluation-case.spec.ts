@@ -52,7 +52,10 @@ function situation(more: Partial<Scenario> = {}): Scenario {
 describe('the case of a situation', () => {
   it('equals case A of the engine contract for the laser of case A', () => {
     const input = { ruleSet: 'ansi-z136.1-2014', scenarios: [situation()] } as const;
-    const [first] = evaluateScenarios(inputs(line('e1', 532)), { ...input, scenarios: [...input.scenarios] });
+    const [first] = evaluateScenarios(inputs(line('e1', 532)), {
+      ...input,
+      scenarios: [...input.scenarios],
+    });
     const result = first?.result;
     if (!result || !isEvaluated(result)) throw new Error('not evaluated');
     // Engine contract 8, case A.
@@ -98,7 +101,10 @@ describe('the case of a situation', () => {
       },
     });
     const tunable = inputs(line('e1', 690, { wavelengthToNm: q(1040) }));
-    const [first] = evaluateScenarios(tunable, { ruleSet: 'icnirp-2013', scenarios: [situation()] });
+    const [first] = evaluateScenarios(tunable, {
+      ruleSet: 'icnirp-2013',
+      scenarios: [situation()],
+    });
     expect(first?.result).toMatchObject({ errors: [{ path: 'scenarios[0].atWavelengthNm.e1' }] });
   });
 
@@ -108,7 +114,12 @@ describe('the case of a situation', () => {
     const built = scenarioCase(laser, situation({ emissionIds: ['e1', 'e2'] }), 'icnirp-2013');
     expect(built).toMatchObject({
       ok: false,
-      errors: [{ path: 'emissionIds', message: expect.stringMatching(/free beam.*numerical aperture 0.22/) }],
+      errors: [
+        {
+          path: 'emissionIds',
+          message: expect.stringMatching(/free beam.*numerical aperture 0.22/),
+        },
+      ],
     });
     const alone = scenarioCase(laser, situation({ emissionIds: ['e2'] }), 'icnirp-2013');
     expect(alone).toMatchObject({ case: { path: { kind: 'fiber', numericalAperture: 0.22 } } });
@@ -151,7 +162,10 @@ describe('what got worse', () => {
   const scenarios = [situation({ emissionIds: ['e1'] })];
   const of = (...lines: Emission[]) => {
     const chosen = [{ ...scenarios[0]!, emissionIds: lines.map(({ id }) => id) }];
-    const results = evaluateScenarios(inputs(...lines), { ruleSet: 'iec-60825-1-2014', scenarios: chosen });
+    const results = evaluateScenarios(inputs(...lines), {
+      ruleSet: 'iec-60825-1-2014',
+      scenarios: chosen,
+    });
     return { scenarios: chosen, results };
   };
 
@@ -182,7 +196,11 @@ describe('what got worse', () => {
   it('says what is gone', () => {
     const changes = compareResults(of(line('e1', 800), line('e2', 400)), of(line('e1', 800)));
     expect(changes).toContainEqual(
-      expect.objectContaining({ what: '400 nm: optical density, eye', direction: 'gone', today: null }),
+      expect.objectContaining({
+        what: '400 nm: optical density, eye',
+        direction: 'gone',
+        today: null,
+      }),
     );
   });
 });
@@ -207,7 +225,10 @@ describe('inputs', () => {
   it('are told apart field by field', () => {
     const before = inputs(line('e1', 532), line('e2', 1064));
     const after: LaserInputs = {
-      ...inputs(line('e1', 532, { powerW: q(10, { source: 'measured' }), m2: 1.2 }), line('e3', 355)),
+      ...inputs(
+        line('e1', 532, { powerW: q(10, { source: 'measured' }), m2: 1.2 }),
+        line('e3', 355),
+      ),
       beamPath: 'open',
     };
     expect(changedInputs(before, after)).toEqual([
@@ -229,14 +250,27 @@ describe('inputs', () => {
 it.each([
   [line('a', 532), 'CW, 5 W'],
   [
-    line('a', 800, { mode: 'repetitive', pulseEnergyJ: q(5e-3), pulseDurationS: q(35e-15), repetitionRateHz: q(1000) }),
+    line('a', 800, {
+      mode: 'repetitive',
+      pulseEnergyJ: q(5e-3),
+      pulseDurationS: q(35e-15),
+      repetitionRateHz: q(1000),
+    }),
     '5 mJ, 35 fs, 1 kHz',
   ],
   [
-    line('a', 800, { mode: 'mode-locked', powerW: q(0.6), pulseDurationS: q(10e-15), repetitionRateHz: q(80e6) }),
+    line('a', 800, {
+      mode: 'mode-locked',
+      powerW: q(0.6),
+      pulseDurationS: q(10e-15),
+      repetitionRateHz: q(80e6),
+    }),
     'mode-locked, 600 mW, 10 fs, 80 MHz',
   ],
-  [line('a', 800, { mode: 'single', pulseEnergyJ: q(4e-5), pulseDurationS: q(3e-13) }), '40 µJ, 300 fs, single'],
+  [
+    line('a', 800, { mode: 'single', pulseEnergyJ: q(4e-5), pulseDurationS: q(3e-13) }),
+    '40 µJ, 300 fs, single',
+  ],
 ])('a line in a list reads as on the data sheet', (emission, text) => {
   expect(emissionSummary(emission)).toBe(text);
 });

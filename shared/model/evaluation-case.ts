@@ -63,7 +63,9 @@ export function scenarioCase(
     }
     const line = beamOf(emission, scenario.atWavelengthNm[id], scenario.path as Path);
     if (!line.ok) {
-      errors.push(...line.errors.map((error) => ({ ...error, path: pathOf(error.path, id, index) })));
+      errors.push(
+        ...line.errors.map((error) => ({ ...error, path: pathOf(error.path, id, index) })),
+      );
       continue;
     }
     const name = several ? `${lineName(emission)}: ` : '';
@@ -102,9 +104,7 @@ export function evaluateScenarios(
 }
 
 /** Whether the engine could evaluate the case. */
-export function isEvaluated(
-  result: EvaluationResult | CaseErrors,
-): result is EvaluationResult {
+export function isEvaluated(result: EvaluationResult | CaseErrors): result is EvaluationResult {
   return !('errors' in result);
 }
 

@@ -30,11 +30,13 @@ export function hashedInputs(inputs: LaserInputs): LaserInputs {
 
 function withoutTexts(emission: Emission): Emission {
   const entries = Object.entries(emission).map(([field, value]) => {
-    if (!isQuantity(value)) return [field, value] as const;
-    const { text: _typed, ...quantity } = value;
-    return [field, quantity] as const;
+    return [field, isQuantity(value) ? withoutText(value) : value] as const;
   });
   return Object.fromEntries(entries) as Emission;
+}
+
+function withoutText({ text: _typed, ...quantity }: Quantity): Quantity {
+  return quantity;
 }
 
 export function isQuantity(value: unknown): value is Quantity {

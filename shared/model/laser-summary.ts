@@ -44,7 +44,8 @@ export function emissionSummary(emission: Emission): string {
   };
   const energy = say('pulseEnergyJ', 'J');
   const power = energy.length > 0 ? [] : say('powerW', 'W');
-  const peak = energy.length + power.length > 0 ? [] : say('peakPowerW', 'W').map((w) => `${w} peak`);
+  const peak =
+    energy.length + power.length > 0 ? [] : say('peakPowerW', 'W').map((w) => `${w} peak`);
   const pulse = [...energy, ...power, ...peak, ...say('pulseDurationS', 's')];
   switch (emission.mode) {
     case 'cw':
@@ -52,7 +53,9 @@ export function emissionSummary(emission: Emission): string {
     case 'single':
       return [...pulse, 'single'].join(', ');
     case 'burst': {
-      const count = emission.pulsesPerBurst ? [`${figure(emission.pulsesPerBurst.value)} a burst`] : [];
+      const count = emission.pulsesPerBurst
+        ? [`${figure(emission.pulsesPerBurst.value)} a burst`]
+        : [];
       return [...pulse, ...count, ...say('burstRateHz', 'Hz')].join(', ');
     }
     case 'repetitive':
@@ -64,9 +67,4 @@ export function emissionSummary(emission: Emission): string {
 }
 
 type SummaryField =
-  | 'powerW'
-  | 'peakPowerW'
-  | 'pulseEnergyJ'
-  | 'pulseDurationS'
-  | 'repetitionRateHz'
-  | 'burstRateHz';
+  'powerW' | 'peakPowerW' | 'pulseEnergyJ' | 'pulseDurationS' | 'repetitionRateHz' | 'burstRateHz';

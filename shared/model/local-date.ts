@@ -48,7 +48,8 @@ export function daysBetween(from: LocalDate, to: LocalDate): number {
   return Math.round((dayMs(to) - dayMs(from)) / DAY_MS);
 }
 
-const MONTHS = 'January February March April May June July August September October November December';
+const MONTHS =
+  'January February March April May June July August September October November December';
 
 /** "3 May 2027". */
 export function dateWords(date: LocalDate): string {

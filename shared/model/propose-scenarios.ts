@@ -56,7 +56,7 @@ function byWayOut(emissions: readonly Emission[]): Group[] {
     ways.set(way, [...(ways.get(way) ?? []), emission]);
   }
   return [...ways.values()].map((group) => ({
-    name: group.length === 1 ? (group[0]!.label ?? '') : 'all lines',
+    name: group.length === 1 ? (group[0]?.label ?? '') : 'all lines',
     emissions: group,
   }));
 }

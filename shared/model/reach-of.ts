@@ -46,9 +46,9 @@ export function reachOf(
 
 /** Each line of the situation as if it were on alone. */
 function linesAlone({ case: whole, result }: Evaluated): Reach['lines'] {
-  if (whole.beams.length === 1) {
-    const { wavelengthNm } = whole.beams[0]!;
-    return [{ wavelengthNm, eyeDistanceM: result.eye.hazardDistanceM }];
+  const [first, ...others] = whole.beams;
+  if (first && others.length === 0) {
+    return [{ wavelengthNm: first.wavelengthNm, eyeDistanceM: result.eye.hazardDistanceM }];
   }
   return whole.beams.flatMap((beam) => {
     const alone = evaluate({ ...whole, beams: [beam] }, { bare: true });

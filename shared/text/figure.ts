@@ -8,8 +8,8 @@ const PREFIXES: readonly (readonly [factor: number, prefix: string])[] = [
   [1e-6, 'µ'],
   [1e-9, 'n'],
   [1e-12, 'p'],
-  [1e-15, 'f'],
 ];
+const SMALLEST = [1e-15, 'f'] as const;
 /** Units that take an SI prefix; the others already have theirs. */
 const PREFIXABLE: readonly string[] = ['W', 'J', 's', 'Hz', 'm'];
 
@@ -23,7 +23,7 @@ export function figure(value: number, unit = ''): string {
   const size = Math.abs(Number(value.toPrecision(4))) * (1 + 1e-12);
   // Above a kilosecond the prefix would be strange: 30,000 s.
   if (unit === 's' && size >= 1) return join(digits(value), unit);
-  const [factor, prefix] = PREFIXES.find(([step]) => size >= step) ?? PREFIXES.at(-1)!;
+  const [factor, prefix] = PREFIXES.find(([step]) => size >= step) ?? SMALLEST;
   return join(digits(value / factor), prefix + unit);
 }
 

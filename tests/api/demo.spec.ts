@@ -78,7 +78,14 @@ describe('the demo institute', () => {
       commissioning: 1,
       'on-loan': 1,
     });
-    for (const state of ['requested', 'approved-to-buy', 'rejected', 'withdrawn', 'disposed', 'transferred']) {
+    for (const state of [
+      'requested',
+      'approved-to-buy',
+      'rejected',
+      'withdrawn',
+      'disposed',
+      'transferred',
+    ]) {
       expect((await register(`&state=${state}`)).total, state).toBeGreaterThan(0);
     }
   });
@@ -86,7 +93,10 @@ describe('the demo institute', () => {
   it('has its evaluations in the states of its table', async () => {
     const rows = await evaluations();
     const of = (tag: string) =>
-      rows.filter(({ laser }) => laser.tag === tag).map(({ number, state }) => `${number} ${state}`).sort();
+      rows
+        .filter(({ laser }) => laser.tag === tag)
+        .map(({ number, state }) => `${number} ${state}`)
+        .sort();
     expect(of('L-03')).toEqual(['1 stale']);
     expect(of('L-12')).toEqual(['1 stale']);
     expect(of('L-15')).toEqual(['1 stale']);
@@ -133,25 +143,38 @@ describe('the demo institute', () => {
   it('shows what got worse by the doubling crystal of L-03', async () => {
     const row = (await evaluations()).find(({ laser }) => laser.tag === 'L-03');
     const { body } = await lso.get(`/api/evaluations/${row?.id}`).expect(200);
-    expect(body.inputsChanged).toEqual([{ field: '400 nm', sealed: 'not on record', today: 'added' }]);
+    expect(body.inputsChanged).toEqual([
+      { field: '400 nm', sealed: 'not on record', today: 'added' },
+    ]);
     expect(body.whatChanged[0]).toMatchObject({ direction: 'new' });
     const halved = (await evaluations()).find(({ laser }) => laser.tag === 'L-12');
     const less = (await lso.get(`/api/evaluations/${halved?.id}`).expect(200)).body;
-    expect(less.whatChanged.map((change: { direction: string }) => change.direction)).toContain('better');
+    expect(less.whatChanged.map((change: { direction: string }) => change.direction)).toContain(
+      'better',
+    );
   });
 
   it('tells each of its people what waits for them', async () => {
     const kinds = async (client: TestClient) =>
-      (await client.get('/api/today').expect(200)).body.items.map((item: { kind: string; title: string }) =>
-        `${item.kind} ${item.title.split(',')[0]}`,
+      (await client.get('/api/today').expect(200)).body.items.map(
+        (item: { kind: string; title: string }) => `${item.kind} ${item.title.split(',')[0]}`,
       ) as string[];
     expect(await kinds(lso)).toEqual(
-      expect.arrayContaining(['check L-22', 'sign L-35', 'laser-check L-20', 'blocked L-03', 'waiver-ends L-23', 'review-due L-41']),
+      expect.arrayContaining([
+        'check L-22',
+        'sign L-35',
+        'laser-check L-20',
+        'blocked L-03',
+        'waiver-ends L-23',
+        'review-due L-41',
+      ]),
     );
     expect(await kinds(await signIn('Kofi Asantewell'))).toContain('check L-22');
     const supervisor = await kinds(await signIn('Aiko Tanabeshi'));
     expect(supervisor).toContain('stale L-03');
-    expect(supervisor.every((one) => !one.startsWith('check') && !one.startsWith('sign'))).toBe(true);
+    expect(supervisor.every((one) => !one.startsWith('check') && !one.startsWith('sign'))).toBe(
+      true,
+    );
     expect(await kinds(await signIn('Hanae Morishiba'))).toEqual([]);
     expect(await kinds(await signIn('Noor Hadiqani'))).toEqual([]);
   });

@@ -15,6 +15,7 @@ import {
   type Team,
 } from '../support/evaluation-steps';
 import { aLaser, anEmission, quantity } from '../support/laser-builders';
+import { asBytes } from '../support/response-body';
 import { startTestApp, type TestApp } from '../support/test-app';
 
 let app: TestApp;
@@ -66,19 +67,24 @@ describe('against those who may use the product', () => {
     expect(touch('delete from evaluations where id = ?')).toThrow(/never deleted/);
     const signature = 'update evaluation_signatures set comment = null where evaluation_id = ?';
     expect(touch(signature)).toThrow(/never changed/);
-    expect(touch('delete from evaluation_signatures where evaluation_id = ?')).toThrow(/never deleted/);
-    expect(touch(`update evaluation_seals set sha256 = '' where evaluation_id = ?`)).toThrow(/never/);
+    expect(touch('delete from evaluation_signatures where evaluation_id = ?')).toThrow(
+      /never deleted/,
+    );
+    expect(touch(`update evaluation_seals set sha256 = '' where evaluation_id = ?`)).toThrow(
+      /never/,
+    );
     expect(touch('delete from evaluation_seals where evaluation_id = ?')).toThrow(/never deleted/);
   });
 
   it('gives the sealed text itself, and its hash is the one that is shown', async () => {
     const { sealSha256 } = await readEvaluation(team.lso, id);
     const path = `/api/evaluations/${id}/seal.json`;
-    const { text, headers } = await team.lso.get(path).buffer(true).parse(asText).expect(200).then(
-      (response) => ({ text: response.body as string, headers: response.headers }),
-    );
+    const { body, headers } = await team.lso.get(path).buffer(true).parse(asBytes).expect(200);
+    const text = (body as Buffer).toString('utf8');
     expect(createHash('sha256').update(text).digest('hex')).toBe(sealSha256);
-    expect(headers['content-disposition']).toMatch(/^attachment; filename="L-\d+-evaluation-1-seal/);
+    expect(headers['content-disposition']).toMatch(
+      /^attachment; filename="L-\d+-evaluation-1-seal/,
+    );
     const sealed = JSON.parse(text);
     expect(sealed).toMatchObject({
       format: 'limen-evaluation-seal',
@@ -92,7 +98,9 @@ describe('against those who may use the product', () => {
 describe('against somebody who writes to the file', () => {
   beforeAll(() => {
     const triggers = attacker
-      .prepare(`select name from sqlite_master where type = 'trigger' and tbl_name like 'evaluation%'`)
+      .prepare(
+        `select name from sqlite_master where type = 'trigger' and tbl_name like 'evaluation%'`,
+      )
       .pluck()
       .all() as string[];
     for (const name of triggers) attacker.exec(`drop trigger ${name}`);
@@ -144,19 +152,22 @@ describe('against somebody who writes to the file', () => {
     expect(await verifies()).toBe(true);
   });
 
-  it.each(['input', 'laser_inputs', 'results'])('any one value changed in %s is found', async (column) => {
-    const whole = JSON.parse(rowOf('evaluations', id)[column] as string) as unknown;
-    const paths = leavesOf(whole);
-    const step = Math.max(1, Math.floor(paths.length / 110));
-    const chosen = paths.filter((_, index) => index % step === 0);
-    const survived: string[] = [];
-    for (const path of chosen) {
-      const changed = JSON.stringify(withOther(whole, path));
-      if (await survives('evaluations', column, changed)) survived.push(path.join('.'));
-    }
-    expect(chosen.length).toBeGreaterThan(20);
-    expect(survived).toEqual([]);
-  });
+  it.each(['input', 'laser_inputs', 'results'])(
+    'any one value changed in %s is found',
+    async (column) => {
+      const whole = JSON.parse(rowOf('evaluations', id)[column] as string) as unknown;
+      const paths = leavesOf(whole);
+      const step = Math.max(1, Math.floor(paths.length / 110));
+      const chosen = paths.filter((_, index) => index % step === 0);
+      const survived: string[] = [];
+      for (const path of chosen) {
+        const changed = JSON.stringify(withOther(whole, path));
+        if (await survives('evaluations', column, changed)) survived.push(path.join('.'));
+      }
+      expect(chosen.length).toBeGreaterThan(20);
+      expect(survived).toEqual([]);
+    },
+  );
 
   it.each([
     'id',
@@ -234,13 +245,10 @@ function withOther(whole: unknown, path: Path): unknown {
     if (typeof whole === 'number') return whole === 0 ? 1 : whole * (1 + 1e-15) + Number.EPSILON;
     return typeof whole === 'boolean' ? !whole : `${String(whole)}.`;
   }
-  const copy = (Array.isArray(whole) ? [...whole] : { ...(whole as object) }) as Record<string, unknown>;
+  const copy = (Array.isArray(whole) ? [...whole] : { ...(whole as object) }) as Record<
+    string,
+    unknown
+  >;
   copy[key] = withOther(copy[key], rest);
   return copy;
-}
-
-function asText(res: NodeJS.ReadableStream, done: (error: Error | null, body: string) => void): void {
-  const parts: Buffer[] = [];
-  res.on('data', (part: Buffer) => parts.push(part));
-  res.on('end', () => done(null, Buffer.concat(parts).toString('utf8')));
 }

@@ -5,6 +5,7 @@ import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 
 import { readLaser, register, signInTeam, type Team } from '../support/evaluation-steps';
 import { aLaser } from '../support/laser-builders';
+import { asBytes } from '../support/response-body';
 import { startTestApp, type TestApp } from '../support/test-app';
 import type { TestClient } from '../support/test-client';
 
@@ -22,22 +23,36 @@ async function newLaser(): Promise<string> {
   return (await register(team.supervisor, aLaser({ areaId: app.areaIds.own }))).id;
 }
 
-const PDF = Buffer.from('%PDF-1.7\n1 0 obj<</Type/Catalog>>endobj\ntrailer<</Root 1 0 R>>\n%%EOF\n');
+const PDF = Buffer.from(
+  '%PDF-1.7\n1 0 obj<</Type/Catalog>>endobj\ntrailer<</Root 1 0 R>>\n%%EOF\n',
+);
 const PNG = Buffer.from(
   'iVBORw0KGgoAAAANSUhEUgAAAAEAAAABCAYAAAAfFcSJAAAADUlEQVR42mNk+M9QDwADhgGAWjR9awAAAABJRU5ErkJggg==',
   'base64',
 );
 const JPEG = Buffer.from('ffd8ffe000104a46494600010100000100010000ffd9', 'hex');
-const WEBP = Buffer.concat([Buffer.from('RIFF'), Buffer.from([26, 0, 0, 0]), Buffer.from('WEBPVP8L'), Buffer.alloc(18)]);
+const WEBP = Buffer.concat([
+  Buffer.from('RIFF'),
+  Buffer.from([26, 0, 0, 0]),
+  Buffer.from('WEBPVP8L'),
+  Buffer.alloc(18),
+]);
 const GIF = Buffer.from('GIF89a\x01\x00\x01\x00\x00\x00\x00;', 'latin1');
 
 function attach(
   content: Buffer,
   filename: string,
-  { kind = 'photo', client = team.supervisor, contentType }: { kind?: string; client?: TestClient; contentType?: string } = {},
+  {
+    kind = 'photo',
+    client = team.supervisor,
+    contentType,
+  }: { kind?: string; client?: TestClient; contentType?: string } = {},
 ) {
   const options = { filename, ...(contentType ? { contentType } : {}) };
-  return client.post(`/api/lasers/${laserId}/files`).field('kind', kind).attach('file', content, options);
+  return client
+    .post(`/api/lasers/${laserId}/files`)
+    .field('kind', kind)
+    .attach('file', content, options);
 }
 
 describe('attaching files', () => {
@@ -46,33 +61,44 @@ describe('attaching files', () => {
     ['photo.png', PNG, 'image/png'],
     ['photo.JPG', JPEG, 'image/jpeg'],
     ['photo.webp', WEBP, 'image/webp'],
-  ])('takes %s, and gives it back as an attachment that runs nothing', async (name, content, type) => {
-    const { body } = await attach(content, name).expect(201);
-    expect(body).toMatchObject({ name, mediaType: type, sizeBytes: content.length });
-    const path = `/api/lasers/${laserId}/files/${body.id}`;
-    const got = await team.supervisor.get(path).buffer(true).parse(binary).expect(200);
-    expect(Buffer.compare(got.body as Buffer, content)).toBe(0);
-    expect(got.headers).toMatchObject({
-      'content-type': type,
-      'x-content-type-options': 'nosniff',
-      'content-disposition': expect.stringMatching(/^attachment;/),
-      'content-security-policy': expect.stringMatching(/^sandbox;/),
-    });
-    await team.supervisor.delete(path).expect(204);
-    await team.supervisor.get(path).expect(404);
-  });
+  ])(
+    'takes %s, and gives it back as an attachment that runs nothing',
+    async (name, content, type) => {
+      const { body } = await attach(content, name).expect(201);
+      expect(body).toMatchObject({ name, mediaType: type, sizeBytes: content.length });
+      const path = `/api/lasers/${laserId}/files/${body.id}`;
+      const got = await team.supervisor.get(path).buffer(true).parse(asBytes).expect(200);
+      expect(Buffer.compare(got.body as Buffer, content)).toBe(0);
+      expect(got.headers).toMatchObject({
+        'content-type': type,
+        'x-content-type-options': 'nosniff',
+        'content-disposition': expect.stringMatching(/^attachment;/),
+        'content-security-policy': expect.stringMatching(/^sandbox;/),
+      });
+      await team.supervisor.delete(path).expect(204);
+      await team.supervisor.get(path).expect(404);
+    },
+  );
 
-  const svg = Buffer.from('<svg xmlns="http://www.w3.org/2000/svg"><script>alert(1)</script></svg>');
+  const svg = Buffer.from(
+    '<svg xmlns="http://www.w3.org/2000/svg"><script>alert(1)</script></svg>',
+  );
   const html = Buffer.from('<!doctype html><script>alert(1)</script>');
   const zip = Buffer.from('504b0304140000000800', 'hex');
-  const eicar = Buffer.from('X5O!P%@AP[4\\PZX54(P^)7CC)7}$EICAR-' + 'STANDARD-ANTIVIRUS-TEST-FILE!$H+H*');
+  const eicar = Buffer.from(
+    'X5O!P%@AP[4\\PZX54(P^)7CC)7}$EICAR-' + 'STANDARD-ANTIVIRUS-TEST-FILE!$H+H*',
+  );
   it.each([
     ['an SVG', svg, 'picture.svg'],
     ['an SVG named PNG', svg, 'picture.png'],
     ['HTML', html, 'page.html'],
     ['HTML named PDF', html, 'page.pdf'],
     ['a GIF', GIF, 'move.gif'],
-    ['a GIF with script, named JPEG', Buffer.concat([GIF, Buffer.from('/*<script>*/')]), 'move.jpg'],
+    [
+      'a GIF with script, named JPEG',
+      Buffer.concat([GIF, Buffer.from('/*<script>*/')]),
+      'move.jpg',
+    ],
     ['a zip', zip, 'sheet.pdf'],
     ['an executable', Buffer.from('4d5a9000', 'hex'), 'run.exe'],
     ['an executable named PNG', Buffer.from('7f454c46020101', 'hex'), 'run.png'],
@@ -116,17 +142,28 @@ describe('attaching files', () => {
   });
 
   it('refuses what is larger than 20 MB', async () => {
-    const { status } = await attach(Buffer.concat([PNG, Buffer.alloc(20 * 1024 * 1024)]), 'big.png');
+    const { status } = await attach(
+      Buffer.concat([PNG, Buffer.alloc(20 * 1024 * 1024)]),
+      'big.png',
+    );
     expect(status).toBe(413);
   });
 
   it('refuses two files, other fields and unknown kinds', async () => {
     const path = `/api/lasers/${laserId}/files`;
     const post = () => team.supervisor.post(path);
-    await post().field('kind', 'photo').attach('file', PNG, 'a.png').attach('file', PNG, 'b.png').expect(400);
+    await post()
+      .field('kind', 'photo')
+      .attach('file', PNG, 'a.png')
+      .attach('file', PNG, 'b.png')
+      .expect(400);
     await post().field('kind', 'photo').attach('other', PNG, 'a.png').expect(400);
     await post().field('kind', 'selfie').attach('file', PNG, 'a.png').expect(400);
-    await post().field('kind', 'photo').field('admin', '1').attach('file', PNG, 'a.png').expect(400);
+    await post()
+      .field('kind', 'photo')
+      .field('admin', '1')
+      .attach('file', PNG, 'a.png')
+      .expect(400);
     await post().field('kind', 'photo').expect(400);
     await post().send({ kind: 'photo' }).expect(415);
   });
@@ -148,9 +185,3 @@ describe('attaching files', () => {
     expect(trail.body.rows[0]).toMatchObject({ action: 'laser.attach-file' });
   });
 });
-
-function binary(res: NodeJS.ReadableStream, done: (error: Error | null, body: Buffer) => void): void {
-  const parts: Buffer[] = [];
-  res.on('data', (part: Buffer) => parts.push(part));
-  res.on('end', () => done(null, Buffer.concat(parts)));
-}

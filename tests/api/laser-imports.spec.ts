@@ -241,28 +241,32 @@ describe('saving', () => {
     expect(await countLasers()).toBe(before);
   });
 
-  it('takes 2,000 rows, shows its progress, and the register answers meanwhile', { timeout: 300_000 }, async () => {
-    const before = await countLasers();
-    const rows = Array.from({ length: 2000 }, (_, index) =>
-      row({ tag: `B-${index}`, serial: `B${index}`, wavelength_nm: 400 + (index % 600) }),
-    );
-    const checked = await send(supervisor, [HEADER, ...rows].join('\n'));
-    expect(checked).toMatchObject({ rowsGood: 2000, lasers: 2000, errorCount: 0 });
-    await supervisor.post(`/api/laser-imports/${checked.id}/save`).expect(202);
-    const seen: number[] = [];
-    for (;;) {
-      const { body } = await supervisor.get(`/api/laser-imports/${checked.id}`).expect(200);
-      seen.push(body.rowsDone);
-      if (body.status !== 'saving') break;
-    }
-    expect(seen.some((done) => done > 0 && done < 2000)).toBe(true);
-    expect((await settled(supervisor, checked.id)).status).toBe('saved');
-    expect(await countLasers()).toBe(before + 2000);
-    const found = await lso.get('/api/lasers?q=B-1999').expect(200);
-    expect(found.body.total).toBe(1);
-    const verified = await lso.get('/api/audit-trail/verification').expect(200);
-    expect(verified.body.intact).toBe(true);
-  });
+  it(
+    'takes 2,000 rows, shows its progress, and the register answers meanwhile',
+    { timeout: 300_000 },
+    async () => {
+      const before = await countLasers();
+      const rows = Array.from({ length: 2000 }, (_, index) =>
+        row({ tag: `B-${index}`, serial: `B${index}`, wavelength_nm: 400 + (index % 600) }),
+      );
+      const checked = await send(supervisor, [HEADER, ...rows].join('\n'));
+      expect(checked).toMatchObject({ rowsGood: 2000, lasers: 2000, errorCount: 0 });
+      await supervisor.post(`/api/laser-imports/${checked.id}/save`).expect(202);
+      const seen: number[] = [];
+      for (;;) {
+        const { body } = await supervisor.get(`/api/laser-imports/${checked.id}`).expect(200);
+        seen.push(body.rowsDone);
+        if (body.status !== 'saving') break;
+      }
+      expect(seen.some((done) => done > 0 && done < 2000)).toBe(true);
+      expect((await settled(supervisor, checked.id)).status).toBe('saved');
+      expect(await countLasers()).toBe(before + 2000);
+      const found = await lso.get('/api/lasers?q=B-1999').expect(200);
+      expect(found.body.total).toBe(1);
+      const verified = await lso.get('/api/audit-trail/verification').expect(200);
+      expect(verified.body.intact).toBe(true);
+    },
+  );
 
   it('can be canceled while it saves: nothing is kept', async () => {
     const before = await countLasers();

@@ -83,7 +83,9 @@ describe('entering the register', () => {
     const changed = { ...inputOf(laser), verifiedClass: '4' };
     await team.supervisor.put(`/api/lasers/${laser.id}`, changed, laser.version).expect(400);
     await team.deputy.put(`/api/lasers/${laser.id}`, changed, laser.version).expect(400);
-    const { body } = await team.lso.put(`/api/lasers/${laser.id}`, changed, laser.version).expect(200);
+    const { body } = await team.lso
+      .put(`/api/lasers/${laser.id}`, changed, laser.version)
+      .expect(200);
     // Who leaves it as it is may still change the rest.
     const noted = { ...inputOf(body), note: 'Seen.' };
     await team.supervisor.put(`/api/lasers/${laser.id}`, noted, body.version).expect(200);
@@ -111,8 +113,13 @@ describe('entering the register', () => {
     const laser = await register(team.lso, aLaser({ areaId: app.areaIds.own }));
     app.clock.advance({ minutes: 1 });
     const moved = { ...inputOf(laser), areaId: app.areaIds.near };
-    const { body } = await team.lso.put(`/api/lasers/${laser.id}`, moved, laser.version).expect(200);
-    expect(body.places.map((place: { area: { code: string } }) => place.area.code)).toEqual(['T-2', 'T-1']);
+    const { body } = await team.lso
+      .put(`/api/lasers/${laser.id}`, moved, laser.version)
+      .expect(200);
+    expect(body.places.map((place: { area: { code: string } }) => place.area.code)).toEqual([
+      'T-2',
+      'T-1',
+    ]);
   });
 });
 
@@ -159,8 +166,16 @@ describe('the life cycle', () => {
   it.each([
     ['no waiver', { reason: REASON }, /Give a waiver/],
     ['no reason', { waiver: WAIVER }, /Give the reason/],
-    ['a waiver of yesterday', { reason: REASON, waiver: { ...WAIVER, untilOn: '2026-11-30' } }, /after today/],
-    ['a waiver of two years', { reason: REASON, waiver: { ...WAIVER, untilOn: '2028-12-01' } }, /12 months/],
+    [
+      'a waiver of yesterday',
+      { reason: REASON, waiver: { ...WAIVER, untilOn: '2026-11-30' } },
+      /after today/,
+    ],
+    [
+      'a waiver of two years',
+      { reason: REASON, waiver: { ...WAIVER, untilOn: '2028-12-01' } },
+      /12 months/,
+    ],
   ])('refuses a take-over with %s', async (_, step, reason) => {
     const { id } = await ownLaser();
     const refused = await stepLaser(team.lso, id, { event: 'take-over', ...step }, 409);
@@ -194,9 +209,15 @@ describe('the life cycle', () => {
     await app.product.jobs.tick();
     team = await signInTeam(app);
     const blocked = await readLaser(team.lso, id);
-    expect(blocked).toMatchObject({ state: 'blocked', block: { by: null }, waiver: { ended: true } });
+    expect(blocked).toMatchObject({
+      state: 'blocked',
+      block: { by: null },
+      waiver: { ended: true },
+    });
     const release = { event: 'release', reason: 'The records are complete.' };
-    const refused = (await stepLaser(team.lso, id, release, 409)) as unknown as { reasons: string[] };
+    const refused = (await stepLaser(team.lso, id, release, 409)) as unknown as {
+      reasons: string[];
+    };
     expect(refused.reasons).toContainEqual(expect.stringMatching(/^The waiver has ended/));
     const again = await stepLaser(team.lso, id, { event: 're-evaluate', reason: 'Short.' }, 400);
     expect(again).toMatchObject({ name: 'invalid-input' });
@@ -216,7 +237,10 @@ describe('the life cycle', () => {
     await app.product.jobs.tick();
     team = await signInTeam(app);
     const aged = (await team.lso.get(`/api/evaluations/${evaluation.id}`).expect(200)).body;
-    expect(aged).toMatchObject({ state: 'stale', staleReasons: [expect.stringMatching(/review date/)] });
+    expect(aged).toMatchObject({
+      state: 'stale',
+      staleReasons: [expect.stringMatching(/review date/)],
+    });
     expect(await readLaser(team.lso, id)).toMatchObject({ state: 'blocked' });
     const confirm = { event: 'confirm-unchanged', password: PASSWORD };
     expect((await stepEvaluation(team.lso, evaluation.id, confirm)).state).toBe('approved');
@@ -225,11 +249,17 @@ describe('the life cycle', () => {
   it('nobody releases a laser that they supervise (SD5), and blocking needs a reason', async () => {
     const input = aLaser({ areaId: app.areaIds.near, supervisorId: app.personIds.lso });
     const laser = await register(team.lso, input);
-    await stepLaser(team.lso, laser.id, { event: 'take-over', reason: REASON, waiver: { ...WAIVER, untilOn: '2029-02-01' } });
+    await stepLaser(team.lso, laser.id, {
+      event: 'take-over',
+      reason: REASON,
+      waiver: { ...WAIVER, untilOn: '2029-02-01' },
+    });
     await stepLaser(team.deputy, laser.id, { event: 'block' }, 409);
     await stepLaser(team.deputy, laser.id, { event: 'block', reason: 'Stop work in the room.' });
     const release = { event: 'release', reason: 'The cause is closed.' };
-    const refused = (await stepLaser(team.lso, laser.id, release, 409)) as unknown as { reasons: string[] };
+    const refused = (await stepLaser(team.lso, laser.id, release, 409)) as unknown as {
+      reasons: string[];
+    };
     expect(refused.reasons).toContain('You supervise this laser: somebody else releases it.');
   });
 
@@ -237,7 +267,12 @@ describe('the life cycle', () => {
     const { id } = await ownLaser({ keyLocation: 'Cabinet' });
     const outsider = await app.signIn('outsider');
     const step = { event: 'transfer', areaId: app.areaIds.far, reason: 'The group has ended.' };
-    await stepLaser(team.supervisor, id, { event: 'transfer', reason: 'x'.repeat(10), areaId: app.areaIds.own }, 409);
+    await stepLaser(
+      team.supervisor,
+      id,
+      { event: 'transfer', reason: 'x'.repeat(10), areaId: app.areaIds.own },
+      409,
+    );
     expect((await stepLaser(team.supervisor, id, step)).state).toBe('transferring');
     await stepLaser(team.supervisor, id, { event: 'accept-in-house' }, 403);
     const accepted = await stepLaser(outsider, id, { event: 'accept-in-house' });
@@ -248,15 +283,27 @@ describe('the life cycle', () => {
   it('clears a disposal that another person asked for', async () => {
     const laser = await ownLaser();
     const nothing = await stepLaser(team.lso, laser.id, { event: 'clear-disposal' }, 409);
-    expect(nothing).toMatchObject({ reasons: expect.arrayContaining(['Nobody has asked for the disposal in the record.']) });
-    const disposal = { method: 'Crushed.', disabled: true, cordRemoved: true, hazardousPartsRemoved: false };
+    expect(nothing).toMatchObject({
+      reasons: expect.arrayContaining(['Nobody has asked for the disposal in the record.']),
+    });
+    const disposal = {
+      method: 'Crushed.',
+      disabled: true,
+      cordRemoved: true,
+      hazardousPartsRemoved: false,
+    };
     const path = `/api/lasers/${laser.id}`;
     const asked = await team.supervisor.put(path, { ...inputOf(laser), disposal }, laser.version);
     const partly = await stepLaser(team.lso, laser.id, { event: 'clear-disposal' }, 409);
     expect(partly).toMatchObject({ reasons: ['Record that hazardous parts are removed.'] });
     const whole = { ...disposal, hazardousPartsRemoved: true };
-    await team.supervisor.put(path, { ...inputOf(asked.body), disposal: whole }, asked.body.version).expect(200);
-    const gone = await stepLaser(team.lso, laser.id, { event: 'clear-disposal', reason: 'Seen.' + '.'.repeat(9) });
+    await team.supervisor
+      .put(path, { ...inputOf(asked.body), disposal: whole }, asked.body.version)
+      .expect(200);
+    const gone = await stepLaser(team.lso, laser.id, {
+      event: 'clear-disposal',
+      reason: 'Seen.' + '.'.repeat(9),
+    });
     expect(gone).toMatchObject({ state: 'disposed', offered: [], mayEdit: false });
     await team.lso.put(path, inputOf(gone), gone.version).expect(409);
     const listed = await team.lso.get(`/api/lasers?q=${gone.tag}`).expect(200);
@@ -266,10 +313,18 @@ describe('the life cycle', () => {
 
   it('the system alone takes its own steps', async () => {
     const { id } = await ownLaser();
-    await stepLaser(team.lso, id, { event: 'take-over', reason: REASON, waiver: { ...WAIVER, untilOn: '2029-02-01' } });
+    await stepLaser(team.lso, id, {
+      event: 'take-over',
+      reason: REASON,
+      waiver: { ...WAIVER, untilOn: '2029-02-01' },
+    });
     await stepLaser(team.lso, id, { event: 'service-starts' }, 403);
     const act = transact(app.edges, acting(SYSTEM, 'test'), async (ctx) =>
-      moveLaser(ctx, await requireLaser(ctx, id), { event: 'service-starts', input: {}, bySystem: true }),
+      moveLaser(ctx, await requireLaser(ctx, id), {
+        event: 'service-starts',
+        input: {},
+        bySystem: true,
+      }),
     );
     await expect(act).rejects.toThrow(NOT_RECORDED_GUARDS['service-permit-in-force']);
   });
@@ -295,7 +350,9 @@ describe('scope', () => {
 
 describe('the list', () => {
   beforeAll(async () => {
-    const lines = [405, 532, 633, 780, 1064].map((nm) => [anEmission({ wavelengthNm: quantity(nm) })]);
+    const lines = [405, 532, 633, 780, 1064].map((nm) => [
+      anEmission({ wavelengthNm: quantity(nm) }),
+    ]);
     for (let index = 0; index < 40; index += 1) {
       const tunable = anEmission({ wavelengthNm: quantity(690), wavelengthToNm: quantity(1040) });
       await app.as('lso', async (ctx) => {
@@ -362,7 +419,10 @@ describe('the list', () => {
     ['405 nm 3B T-1', (row: LaserRow) => row.area?.code === 'T-1' && row.declaredClass === '3B'],
     ['oakh', (row: LaserRow) => row.maker === 'oakhollin'],
     ['ser/1005', (row: LaserRow) => row.serial === 'ser/1005'],
-    ['OAKHOLLIN T-2 class 4', (row: LaserRow) => row.maker === 'oakhollin' && row.declaredClass === '4'],
+    [
+      'OAKHOLLIN T-2 class 4',
+      (row: LaserRow) => row.maker === 'oakhollin' && row.declaredClass === '4',
+    ],
   ])('finds "%s"', async (text, matches) => {
     const { body } = await team.lso.get(`/api/lasers?limit=200&q=${encodeURIComponent(text)}`);
     expect(body.rows.length).toBeGreaterThan(0);
@@ -395,7 +455,10 @@ describe('the list', () => {
   it('exports the filtered list, one row a line, safe for a spreadsheet', async () => {
     const evil = '=HYPERLINK("http://x")';
     const emissions = [anEmission(), anEmission({ id: 'e2', powerW: quantity(0.1 + 0.2) })];
-    await register(team.lso, aLaser({ tag: 'CSV-1', areaId: app.areaIds.own, model: evil, emissions }));
+    await register(
+      team.lso,
+      aLaser({ tag: 'CSV-1', areaId: app.areaIds.own, model: evil, emissions }),
+    );
     const { text, headers } = await team.lso.get('/api/lasers.csv?q=CSV-1').expect(200);
     expect(headers['content-disposition']).toMatch(/attachment/);
     expect(text.startsWith('tag,maker,model,serial')).toBe(true);

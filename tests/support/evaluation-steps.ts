@@ -1,5 +1,5 @@
 import type { Evaluation } from '@shared/model/evaluations';
-import type { Laser, LaserInput } from '@shared/model/lasers';
+import { type Laser, type LaserInput, laserInputSchema } from '@shared/model/lasers';
 
 import { answered } from './laser-builders';
 import { TEST_PASSWORD, type TestApp } from './test-app';
@@ -57,30 +57,9 @@ export async function stepEvaluation(
 
 /** The stored input of a laser, as a form would send it back. */
 export function inputOf(laser: Laser): LaserInput {
-  const {
-    id: _id,
-    version: _version,
-    createdAt: _createdAt,
-    updatedAt: _updatedAt,
-    state: _state,
-    stateSince: _stateSince,
-    area: _area,
-    wallDistanceM: _wall,
-    supervisor: _supervisor,
-    alternate: _alternate,
-    waiver: _waiver,
-    block: _block,
-    reach: _reach,
-    evaluations: _evaluations,
-    places: _places,
-    files: _files,
-    attention: _attention,
-    offered: _offered,
-    mayEdit: _mayEdit,
-    mayEvaluate: _mayEvaluate,
-    ...input
-  } = laser;
-  return input;
+  const fields = Object.keys(laserInputSchema.shape);
+  const own = Object.entries(laser).filter(([field]) => fields.includes(field));
+  return Object.fromEntries(own) as LaserInput;
 }
 
 /** Submitted by the supervisor, class verified and evaluation opened by the LSO. */

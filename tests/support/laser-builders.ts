@@ -1,5 +1,10 @@
 import type { EvaluationInput } from '@shared/model/evaluations';
-import { type Emission, type LaserInput, laserInputSchema, type Quantity } from '@shared/model/lasers';
+import {
+  type Emission,
+  type LaserInput,
+  laserInputSchema,
+  type Quantity,
+} from '@shared/model/lasers';
 
 /** A number of a data sheet. */
 export function quantity(value: number, more: Partial<Quantity> = {}): Quantity {

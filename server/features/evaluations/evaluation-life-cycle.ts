@@ -1,11 +1,6 @@
-import { ENGINE_VERSION } from '@shared/hazard/engine-version';
-import { beamOf } from '@shared/model/emission-beam';
-import { isEvaluated, uncoveredLines } from '@shared/model/evaluation-case';
-import { ACTIVITIES, type Signature } from '@shared/model/evaluations';
-import { lineName } from '@shared/model/laser-inputs';
+import type { Signature } from '@shared/model/evaluations';
 import { addMonths, localDateAt } from '@shared/model/local-date';
 import { ROLE_WORDS, type Role } from '@shared/model/people';
-import type { Settings } from '@shared/model/settings';
 import { statementOf } from '@shared/text/statements';
 import {
   EVALUATION_LIFE_CYCLE,
@@ -18,9 +13,8 @@ import type { Actor as Part } from '@shared/workflow/machine';
 
 import type { Context } from '../../context/context';
 import { newId } from '../../db/new-id';
-import { type Guard, type StepInput, transition, type Workflow } from '../../workflow/transition';
+import { type StepInput, transition, type Workflow } from '../../workflow/transition';
 import {
-  hashOfInputs,
   type LaserRecord,
   placementOf,
   refreshStanding,
@@ -28,6 +22,11 @@ import {
 } from '../lasers/laser-standing-service';
 import { moveLaser } from '../lasers/laser-transition-service';
 import { readSettings } from '../settings/settings-service';
+import {
+  EVALUATION_GUARDS,
+  type EvaluationStep,
+  type EvaluationSubject,
+} from './evaluation-guards';
 import type { EvaluationRecord, StoredSignature } from './evaluation-record';
 import {
   type EvaluationMarks,
@@ -38,24 +37,7 @@ import {
   insertSignature,
   updateEvaluationMarks,
 } from './evaluation-repository';
-import { changedResults } from './evaluation-results';
 import { contentHash, type SealedLaser, sealOf, signatureHash } from './evaluation-seal';
-
-/** An evaluation with the facts that its guards look at. */
-export interface EvaluationSubject {
-  readonly evaluation: EvaluationRecord;
-  readonly laser: LaserRecord;
-  readonly settings: Settings;
-  readonly isNew?: boolean;
-}
-
-export interface EvaluationStep extends StepInput {
-  /** Why it became stale: its inputs changed, or its review date passed. */
-  readonly cause?: 'inputs' | 'review';
-  readonly supersededById?: string;
-}
-
-type GuardCheck = Guard<EvaluationSubject, EvaluationStep>;
 
 export const EVALUATION_WORKFLOW: Workflow<
   EvaluationSubject,
@@ -73,7 +55,7 @@ export const EVALUATION_WORKFLOW: Workflow<
     state: isNew ? 'start' : evaluation.state,
   }),
   hasPart,
-  guards: guards(),
+  guards: EVALUATION_GUARDS,
   moveTo: (ctx, subject, to) => {
     const { state, round } = subject.evaluation;
     const isAnewDraft = to === 'draft' && state !== 'draft';
@@ -106,6 +88,8 @@ export const EVALUATION_WORKFLOW: Workflow<
     'block-laser': blockTheLaser,
   },
 };
+
+export type { EvaluationStep, EvaluationSubject };
 
 /** "L-16, evaluation 2" */
 export function evaluationName(
@@ -141,7 +125,11 @@ const NEXT_MEANING: Readonly<Partial<Record<EvaluationState, Signature['meaning'
   stale: 'confirmed-unchanged',
 };
 
-function hasPart(part: Part, { evaluation, laser }: EvaluationSubject, { actor }: Context): boolean {
+function hasPart(
+  part: Part,
+  { evaluation, laser }: EvaluationSubject,
+  { actor }: Context,
+): boolean {
   switch (part) {
     case 'anyone':
       return true;
@@ -161,101 +149,6 @@ function hasPart(part: Part, { evaluation, laser }: EvaluationSubject, { actor }
     default:
       return false;
   }
-}
-
-function guards(): Readonly<Record<EvaluationGuard, GuardCheck>> {
-  return {
-    'rule-set-chosen': ({ evaluation }) =>
-      when(!evaluation.input.ruleSet, 'Choose the rule set.'),
-    'inputs-complete': ({ evaluation }) => incompleteInputs(evaluation),
-    'all-lines-covered': ({ evaluation }) => uncovered(evaluation),
-    'all-activities-answered': ({ evaluation }) => unanswered(evaluation),
-    'evaluates-without-error': ({ evaluation }) => withoutResult(evaluation),
-    'checker-is-not-author': ({ evaluation }, { ctx }) =>
-      when(evaluation.author.id === ctx.actor.id, 'The author does not check their own evaluation.'),
-    'approver-is-not-author': ({ evaluation, settings }, { ctx }) =>
-      when(
-        evaluation.author.id === ctx.actor.id && !settings.authorMayApprove,
-        'The author does not sign their own evaluation.',
-      ),
-    'deputy-has-delegation': (_, { ctx }) =>
-      when(
-        !ctx.actor.roles.includes('lso'),
-        'Delegations are not recorded here: a deputy authors and checks, the LSO signs.',
-      ),
-    'lso-is-not-a-party': ({ evaluation, laser, settings }, { ctx }) => [
-      ...when(
-        placementOf(laser).supervisorIds.includes(ctx.actor.id),
-        'You supervise this laser: somebody else decides.',
-      ),
-      ...when(
-        evaluation.author.id === ctx.actor.id && !settings.authorMayApprove,
-        'The author does not sign their own evaluation.',
-      ),
-    ],
-    'laser-inputs-equal': ({ evaluation, laser }) =>
-      when(
-        evaluation.laserInputsHash !== hashOfInputs(laser),
-        'The laser’s inputs have changed since: the author takes them over first.',
-      ),
-    // Equal inputs have a guard of their own: here the engine of today meets the sealed results.
-    'results-equal': ({ evaluation }) =>
-      changedResults(evaluation, evaluation.laserInputs).map(
-        ({ scenario, what }) => `The result differs from the sealed one: ${scenario}, ${what}.`,
-      ),
-    'presence-proven': (_, { ctx, input }) =>
-      when(input !== undefined && ctx.proof === null, 'Prove your presence: enter your password.'),
-    'reason-given': (_, { input }) => when(input !== undefined && !input.reason, 'Give the reason.'),
-  };
-}
-
-function incompleteInputs({ laserInputs, input }: EvaluationRecord): string[] {
-  const lines = laserInputs.emissions.flatMap((emission) => {
-    const beam = beamOf(emission, emission.wavelengthToNm && emission.wavelengthNm.value);
-    return beam.ok
-      ? []
-      : beam.errors.map(({ message }) => `${lineName(emission)}: ${message}`);
-  });
-  return [
-    ...when(laserInputs.emissions.length === 0, 'The laser has no line on record.'),
-    ...when(input.scenarios.length === 0, 'Add at least one situation.'),
-    ...lines,
-  ];
-}
-
-function uncovered({ laserInputs, input }: EvaluationRecord): string[] {
-  const sets = laserInputs.emissionSets.filter(
-    (set) =>
-      !input.scenarios.some(({ emissionIds }) =>
-        set.emissionIds.every((id) => emissionIds.includes(id)),
-      ),
-  );
-  return [
-    ...uncoveredLines(laserInputs, input).map((line) => `No situation covers ${line}.`),
-    ...sets.map(({ name }) => `No situation covers the set "${name}".`),
-  ];
-}
-
-function unanswered({ input }: EvaluationRecord): string[] {
-  return ACTIVITIES.filter(
-    (activity) =>
-      !input.scenarios.some((scenario) => scenario.activity === activity) &&
-      !input.notCovered.some((answer) => answer.activity === activity),
-  ).map((activity) => `Evaluate ${activity}, or say why it is not evaluated.`);
-}
-
-function withoutResult({ input, results, engineVersion }: EvaluationRecord): string[] {
-  const failed = input.scenarios.filter(({ id }) => {
-    const found = results.find(({ scenarioId }) => scenarioId === id);
-    return !found || !isEvaluated(found.result);
-  });
-  return [
-    ...when(
-      engineVersion !== ENGINE_VERSION,
-      `The results are of engine ${engineVersion}; this is ${ENGINE_VERSION}. The author saves once more.`,
-    ),
-    ...failed.map(({ name }) => `"${name}" cannot be evaluated; its errors stand at the fields.`),
-  ];
 }
 
 async function sign(
@@ -347,7 +240,9 @@ async function takeOutOfUse(
 ): Promise<void> {
   const number = subject.evaluation.number;
   if (cause === 'inputs') {
-    const input = { reason: `Evaluation ${number} became stale: ${reason ?? 'its inputs changed.'}` };
+    const input = {
+      reason: `Evaluation ${number} became stale: ${reason ?? 'its inputs changed.'}`,
+    };
     await moveLaser(ctx, laser, { event: 'change-notice', input, bySystem: true });
     return;
   }
@@ -444,8 +339,4 @@ async function reread(ctx: Context, subject: EvaluationSubject): Promise<Evaluat
   if (!evaluation) throw new Error('An evaluation vanished within a transaction.');
   const laser = await requireLaser(ctx, evaluation.laserId);
   return { ...subject, evaluation, laser, isNew: false };
-}
-
-function when(fails: boolean, reason: string): string[] {
-  return fails ? [reason] : [];
 }

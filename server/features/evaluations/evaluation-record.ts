@@ -41,6 +41,13 @@ export interface ResultSummary {
   readonly opticalDensity: number | null;
 }
 
+/** The canonical JSON of a signed evaluation, and its SHA-256. */
+export interface Seal {
+  readonly canonicalJson: string;
+  readonly sha256: string;
+  readonly sealedAt: string;
+}
+
 /** A signature as stored: its hash covers all of it, and the content that was signed. */
 export interface StoredSignature extends Omit<Signature, 'verified' | 'actingFor' | 'comment'> {
   readonly evaluationId: string;

@@ -4,8 +4,7 @@ import type { EvaluationState } from '@shared/workflow/evaluation-life-cycle';
 import { sql } from 'kysely';
 
 import type { Tx } from '../../db/database';
-import type { EvaluationRecord, ResultSummary, StoredSignature } from './evaluation-record';
-import type { Seal } from './evaluation-seal';
+import type { EvaluationRecord, ResultSummary, Seal, StoredSignature } from './evaluation-record';
 import type { EvaluationSignatureTable, EvaluationTable } from './evaluation-table';
 
 type JoinedRow = EvaluationTable & {

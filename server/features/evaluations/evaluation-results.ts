@@ -68,7 +68,9 @@ export function adaptedTo(
       : scenario.emissionIds.filter((id) => now.includes(id)),
   }));
   const kept = scenarios.filter(({ emissionIds }) => emissionIds.length > 0);
-  const isNewCovered = kept.some(({ emissionIds }) => added.every((id) => emissionIds.includes(id)));
+  const isNewCovered = kept.some(({ emissionIds }) =>
+    added.every((id) => emissionIds.includes(id)),
+  );
   const forNew = isNewCovered ? [] : proposeScenarios(only(today, added), input.ruleSet);
   const ids = new Set(kept.map(({ id }) => id));
   return { ...input, scenarios: [...kept, ...forNew.filter(({ id }) => !ids.has(id))] };

@@ -1,7 +1,7 @@
 import { createHash } from 'node:crypto';
 
 import { canonicalJson, sha256OfJson } from '../../audit-trail/row-hash';
-import type { EvaluationRecord, StoredSignature } from './evaluation-record';
+import type { EvaluationRecord, Seal, StoredSignature } from './evaluation-record';
 
 /** The laser as it was called when the evaluation was sealed. */
 export interface SealedLaser {
@@ -14,12 +14,6 @@ export interface SealedLaser {
   readonly areaName: string | null;
   readonly declaredClass: string | null;
   readonly verifiedClass: string | null;
-}
-
-export interface Seal {
-  readonly canonicalJson: string;
-  readonly sha256: string;
-  readonly sealedAt: string;
 }
 
 interface SealDocument {

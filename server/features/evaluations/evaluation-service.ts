@@ -135,7 +135,11 @@ export async function changeEvaluation(
 }
 
 /** Takes the laser's present lines into the draft. */
-export async function refreshInputs(ctx: Context, id: string, version: number): Promise<Evaluation> {
+export async function refreshInputs(
+  ctx: Context,
+  id: string,
+  version: number,
+): Promise<Evaluation> {
   const subject = await requireEditable(ctx, id, version);
   const inputs = inputsOf(subject.laser);
   const input = adaptedTo(inputs, subject.evaluation);

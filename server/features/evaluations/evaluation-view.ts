@@ -28,9 +28,7 @@ export async function evaluationView(
   const today = inputsOf(laser);
   const stored = await findSignatures(ctx.tx, evaluation);
   const seal = await findSeal(ctx.tx, evaluation.id);
-  const isIntact = seal
-    ? isSealIntact(seal, evaluation, stored)
-    : evaluation.sealedAt === null;
+  const isIntact = seal ? isSealIntact(seal, evaluation, stored) : evaluation.sealedAt === null;
   const intact = intactSignatures(stored, evaluation);
   const isOpen = EDITABLE.has(evaluation.state);
   return {
@@ -79,9 +77,7 @@ export async function evaluationView(
       ? offeredEvents(ctx, EVALUATION_WORKFLOW, subject)
       : [],
     mayEdit:
-      isOpen &&
-      evaluation.author.id === ctx.actor.id &&
-      isInScope(ctx, 'evaluation.update', place),
+      isOpen && evaluation.author.id === ctx.actor.id && isInScope(ctx, 'evaluation.update', place),
   };
 }
 

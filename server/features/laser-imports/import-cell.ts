@@ -31,7 +31,11 @@ function readChoice(given: string, { of, also }: CellKind & { is: 'choice' }): C
   const word = given.toLowerCase();
   const found = of.find((one) => one.toLowerCase() === word) ?? also?.[word];
   if (found) return { ok: true, value: found };
-  return { ok: false, message: `"${given}" is none of the words for this.`, allowed: of.join(', ') };
+  return {
+    ok: false,
+    message: `"${given}" is none of the words for this.`,
+    allowed: of.join(', '),
+  };
 }
 
 const DATE_FORM = 'year-month-day, for example 2026-12-01';

@@ -5,7 +5,11 @@ import type { QuantityKind } from '@shared/model/quantity-units';
 /** What a cell is read as. */
 export type CellKind =
   | { readonly is: 'text' }
-  | { readonly is: 'choice'; readonly of: readonly string[]; readonly also?: Readonly<Record<string, string>> }
+  | {
+      readonly is: 'choice';
+      readonly of: readonly string[];
+      readonly also?: Readonly<Record<string, string>>;
+    }
   | { readonly is: 'date' }
   | { readonly is: 'flag' }
   | { readonly is: 'year' }
@@ -17,18 +21,41 @@ type QuantityField = {
 }[keyof Emission];
 
 export type Column =
-  | { readonly header: string; readonly of: 'laser'; readonly field: keyof LaserInput; readonly cell: CellKind }
-  | { readonly header: string; readonly of: 'line'; readonly field: keyof Emission; readonly cell: CellKind }
-  | { readonly header: string; readonly of: 'quantity'; readonly field: QuantityField; readonly cell: CellKind }
+  | {
+      readonly header: string;
+      readonly of: 'laser';
+      readonly field: keyof LaserInput;
+      readonly cell: CellKind;
+    }
+  | {
+      readonly header: string;
+      readonly of: 'line';
+      readonly field: keyof Emission;
+      readonly cell: CellKind;
+    }
+  | {
+      readonly header: string;
+      readonly of: 'quantity';
+      readonly field: QuantityField;
+      readonly cell: CellKind;
+    }
   /** Looked up: an area by its code, a person by the e-mail address; the source of the row's numbers. */
-  | { readonly header: string; readonly of: 'area' | 'supervisor' | 'alternate' | 'source'; readonly cell: CellKind };
+  | {
+      readonly header: string;
+      readonly of: 'area' | 'supervisor' | 'alternate' | 'source';
+      readonly cell: CellKind;
+    };
 
 const text = { is: 'text' } as const;
 const date = { is: 'date' } as const;
 const flag = { is: 'flag' } as const;
 const number = { is: 'number' } as const;
 const laserClass = { is: 'choice', of: LASER_CLASSES } as const;
-const convention = { is: 'choice', of: WIDTH_CONVENTIONS, also: { '1/e²': '1/e2', '1/e^2': '1/e2' } } as const;
+const convention = {
+  is: 'choice',
+  of: WIDTH_CONVENTIONS,
+  also: { '1/e²': '1/e2', '1/e^2': '1/e2' },
+} as const;
 
 function quantity(kind: QuantityKind, unit: string) {
   return { is: 'quantity', kind, unit } as const;
@@ -111,11 +138,15 @@ export interface FoundColumn {
 
 /** The column of a header; `power` is `power_w` without its unit, so every cell must say it. */
 export function columnOf(header: string): FoundColumn | undefined {
-  const word = header.trim().toLowerCase().replace(/[\s-]+/g, '_');
+  const word = header
+    .trim()
+    .toLowerCase()
+    .replace(/[\s-]+/g, '_');
   const column = COLUMNS.find((one) => one.header === word);
   if (column) return { column, saysUnit: true };
   const bare = COLUMNS.find(
-    (one) => one.cell.is === 'quantity' && one.header.slice(0, one.header.lastIndexOf('_')) === word,
+    (one) =>
+      one.cell.is === 'quantity' && one.header.slice(0, one.header.lastIndexOf('_')) === word,
   );
   return bare && { column: bare, saysUnit: false };
 }

@@ -2,7 +2,7 @@ import type { ImportError } from '@shared/model/laser-imports';
 import type { LaserInput } from '@shared/model/lasers';
 
 import { COLUMNS } from './import-columns';
-import type { PlannedLaser } from './import-plan';
+import type { PlannedLaser } from './laser-import-table';
 
 /** Lasers of the file that claim the same serial of one maker under different tags. */
 export function duplicatesInFile(planned: readonly PlannedLaser[]): ImportError[] {
@@ -23,9 +23,13 @@ export function duplicatesInFile(planned: readonly PlannedLaser[]): ImportError[
 
 /** The column and cell that a field of the record stands in. */
 export function errorColumn(path: string, input: LaserInput): { column: string; given: string } {
-  const column = LOOKED_UP[path] ?? COLUMNS.find((one) => 'field' in one && one.field === path)?.header;
+  const column =
+    LOOKED_UP[path] ?? COLUMNS.find((one) => 'field' in one && one.field === path)?.header;
   const value = input[path as keyof LaserInput];
-  return { column: column ?? path, given: typeof value === 'string' && !LOOKED_UP[path] ? value : '' };
+  return {
+    column: column ?? path,
+    given: typeof value === 'string' && !LOOKED_UP[path] ? value : '',
+  };
 }
 
 const LOOKED_UP: Readonly<Record<string, string>> = {

@@ -1,19 +1,19 @@
 import { beamOf } from '@shared/model/emission-beam';
 import type { ImportError, LaserImport } from '@shared/model/laser-imports';
-import { type Emission, type LaserInput, laserInputSchema, type Quantity } from '@shared/model/lasers';
+import {
+  type Emission,
+  type LaserInput,
+  laserInputSchema,
+  type Quantity,
+} from '@shared/model/lasers';
 import type { Provenance } from '@shared/model/common';
 
 import { pathText, wordsFor } from '../../http/field-errors';
 import { readCell } from './import-cell';
 import { COLUMNS, type Column, type FoundColumn } from './import-columns';
+import type { PlannedLaser } from './laser-import-table';
 
 type ImportWarning = LaserImport['warnings'][number];
-
-/** A laser that the file describes, with the rows that do. */
-export interface PlannedLaser {
-  readonly rows: readonly number[];
-  readonly input: LaserInput;
-}
 
 /** What the file names and the register knows. */
 export interface Known {
@@ -105,7 +105,15 @@ function planLaser(group: readonly ReadRow[], notes: Notes): PlannedLaser[] {
   const lines = group.flatMap(({ line, row }) => (line ? [{ line, row }] : []));
   if (others.length > 0) {
     for (const { row, line } of group) {
-      if (!line) notes.errors.push(missing(row, 'wavelength_nm', 'A further row of a laser is a line: its wavelength is missing.', '532 nm'));
+      if (!line)
+        notes.errors.push(
+          missing(
+            row,
+            'wavelength_nm',
+            'A further row of a laser is a line: its wavelength is missing.',
+            '532 nm',
+          ),
+        );
     }
   }
   const blank = { maker: '', model: '', homeBuilt: false, mobile: false, emissionSets: [] };
@@ -125,7 +133,11 @@ function planLaser(group: readonly ReadRow[], notes: Notes): PlannedLaser[] {
     }
     return [];
   }
-  warnIncomplete(parsed.data, lines.map(({ row }) => row), notes);
+  warnIncomplete(
+    parsed.data,
+    lines.map(({ row }) => row),
+    notes,
+  );
   return [{ rows, input: parsed.data }];
 }
 

@@ -51,7 +51,9 @@ function sheetOf(
 ): Sheet {
   const errors: ImportError[] = [];
   const columns = header.map((word) => columnOf(word));
-  columns.forEach((found, index) => errors.push(...headerErrors(header, columns, { found, index })));
+  columns.forEach((found, index) =>
+    errors.push(...headerErrors(header, columns, { found, index })),
+  );
   for (const needed of ['maker', 'model']) {
     if (!columns.some((found) => found?.column.header === needed)) {
       errors.push({ row: 1, column: needed, given: '', message: 'This column is missing.' });

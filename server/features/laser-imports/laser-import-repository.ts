@@ -1,8 +1,7 @@
 import type { ImportError, LaserImport } from '@shared/model/laser-imports';
 
 import type { Tx } from '../../db/database';
-import type { PlannedLaser } from './import-plan';
-import type { LaserImportTable } from './laser-import-table';
+import type { LaserImportTable, PlannedLaser } from './laser-import-table';
 
 /** An import as stored, with whose it is and what it would save. */
 export interface StoredImport extends LaserImport {

@@ -9,8 +9,8 @@ import { newId } from '../../db/new-id';
 import { ApiError, Conflict, NotFound } from '../../http/errors';
 import type { Upload } from '../../http/route';
 import { entryErrors, storeLaser } from '../lasers/laser-service';
-import { type Known, type Notes, planLasers, type PlannedLaser, readRow } from './import-plan';
 import { duplicatesInFile, errorColumn } from './import-duplicates';
+import { type Known, type Notes, planLasers, readRow } from './import-plan';
 import { readSheet, type Sheet } from './import-sheet';
 import {
   findImport,
@@ -19,6 +19,7 @@ import {
   type StoredImport,
   updateImport,
 } from './laser-import-repository';
+import type { PlannedLaser } from './laser-import-table';
 
 /** More nobody reads; the count tells of the rest. */
 const MOST_LISTED = 1000;
@@ -140,7 +141,7 @@ async function save(
   await transact(edges, acting, async (ctx) => {
     for (const laser of stored.plan) {
       await storePlanned(ctx, laser);
-      for (const _row of laser.rows) await oneMore(work);
+      await oneMore(work, laser.rows.length);
     }
     await recordChange(ctx, {
       action: 'laser.import',
@@ -209,9 +210,10 @@ function finish(edges: Edges, stored: StoredImport, end: Partial<StoredImport>):
   return bookkeeping(edges, (tx) => updateImport(tx, { ...stored, ...end }, at));
 }
 
-async function oneMore(work: Work): Promise<void> {
-  work.rowsDone += 1;
-  if (work.rowsDone % PORTION === 0) await breathe(work);
+async function oneMore(work: Work, rows = 1): Promise<void> {
+  const portion = Math.floor(work.rowsDone / PORTION);
+  work.rowsDone += rows;
+  if (Math.floor(work.rowsDone / PORTION) > portion) await breathe(work);
 }
 
 /** Lets other requests have their turn; stops here when the person has canceled. */
@@ -244,9 +246,13 @@ async function requireOwn(ctx: Context, id: string): Promise<StoredImport> {
   return stored;
 }
 
+function shown({ personId: _person, plan: _plan, ...view }: StoredImport): LaserImport {
+  return view;
+}
+
 /** With the progress of the moment; work that no process does any more has failed. */
 function viewOf(edges: Edges, stored: StoredImport): LaserImport {
-  const { personId: _person, plan: _plan, ...view } = stored;
+  const view = shown(stored);
   if (view.status !== 'checking' && view.status !== 'saving') return view;
   const work = workOf(edges).get(stored.id);
   if (work) return { ...view, rowsDone: Math.min(work.rowsDone, view.rowsTotal) };

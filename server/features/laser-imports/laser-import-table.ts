@@ -1,4 +1,11 @@
 import type { LaserImport } from '@shared/model/laser-imports';
+import type { LaserInput } from '@shared/model/lasers';
+
+/** A laser that the file describes, with the rows that do. */
+export interface PlannedLaser {
+  readonly rows: readonly number[];
+  readonly input: LaserInput;
+}
 
 export interface LaserImportTable {
   id: string;

@@ -2,6 +2,7 @@ import type { TodayItem } from '@shared/model/today';
 import { dateWords, daysBetween, type LocalDate } from '@shared/model/local-date';
 
 import type { LaserRecord } from './laser-record';
+import { NO_ATTENTION } from './laser-table';
 
 type Facts = Pick<
   LaserRecord,
@@ -14,9 +15,6 @@ export interface Attention {
   /** As the list of today calls it; absent where nobody has to act on it today. */
   readonly kind?: TodayItem['kind'];
 }
-
-/** A laser that nothing waits for. */
-export const NO_ATTENTION = 99;
 
 /** So many days ahead an end is told. */
 const AHEAD_DAYS = 60;
@@ -31,7 +29,8 @@ export function attentionOf(laser: Facts, today: LocalDate): Attention[] {
   if (state === 'blocked') add(1, 'Blocked', 'blocked');
   if (standing === 'stale') add(2, 'Evaluation stale', 'stale');
   if (state === 'change-open') add(3, 'Change open');
-  if (state === 'in-use' && (standing === 'none' || standing === 'open')) add(4, 'Not evaluated', 'not-evaluated');
+  if (state === 'in-use' && (standing === 'none' || standing === 'open'))
+    add(4, 'Not evaluated', 'not-evaluated');
   if (laser.waiver && !WAIVER_RESTS.has(state)) {
     const { untilOn } = laser.waiver;
     const left = daysBetween(today, untilOn);
@@ -41,7 +40,8 @@ export function attentionOf(laser: Facts, today: LocalDate): Attention[] {
   if (state === 'service-open') add(7, 'Service open');
   if (state === 'received' && laser.quarantine) add(8, 'Quarantine');
   if (state === 'registered') add(9, 'Waits for the check of the LSO', 'laser-check');
-  if (state === 'under-evaluation' && standing === 'none') add(10, 'Waits for an evaluation', 'not-evaluated');
+  if (state === 'under-evaluation' && standing === 'none')
+    add(10, 'Waits for an evaluation', 'not-evaluated');
   if (state === 'under-evaluation' && standing === 'open') add(11, 'Evaluation in work');
   if (laser.reviewOn && standing === 'approved') {
     const left = daysBetween(today, laser.reviewOn);

@@ -39,12 +39,7 @@ export async function hasOpenEvaluation(tx: Tx, laserId: string): Promise<boolea
 export async function listEvaluationsOf(tx: Tx, laserId: string): Promise<Laser['evaluations']> {
   const rows = await tx
     .selectFrom('evaluations')
-    .select([
-      'evaluations.id',
-      'evaluations.number',
-      'evaluations.state',
-      'evaluations.signed_at',
-    ])
+    .select(['evaluations.id', 'evaluations.number', 'evaluations.state', 'evaluations.signed_at'])
     .where('evaluations.laser_id', '=', laserId)
     .orderBy('evaluations.number', 'desc')
     .execute();

@@ -1,8 +1,4 @@
-import {
-  type LaserFile,
-  laserFileInputSchema,
-  MAX_FILES_PER_LASER,
-} from '@shared/model/files';
+import { type LaserFile, laserFileInputSchema, MAX_FILES_PER_LASER } from '@shared/model/files';
 import type * as z from 'zod';
 
 import { changesBetween, recordChange } from '../../audit-trail/record-change';

@@ -1,6 +1,6 @@
 import { beamOf } from '@shared/model/emission-beam';
 import { lineName } from '@shared/model/laser-inputs';
-import type { LaserTransition } from '@shared/model/lasers';
+import type { LaserInput, LaserTransition } from '@shared/model/lasers';
 import { addMonths, dateWords, type LocalDate } from '@shared/model/local-date';
 import {
   LASER_LIFE_CYCLE,
@@ -21,7 +21,13 @@ import {
   placementOfArea,
   type StoredBlock,
 } from './laser-record';
-import { addPlace, findLaser, type LaserMarks, updateLaserInput, updateLaserMarks } from './laser-repository';
+import {
+  addPlace,
+  findLaser,
+  type LaserMarks,
+  updateLaserInput,
+  updateLaserMarks,
+} from './laser-repository';
 
 /** A laser with the facts that its guards look at. */
 export interface LaserSubject {
@@ -121,9 +127,7 @@ function hasPart(part: Part, { laser }: LaserSubject, { actor }: Context): boole
     case 'purchasing':
       return actor.roles.includes(part);
     case 'supervisor':
-      return (
-        actor.roles.includes('laser-supervisor') && supervisorsOf(laser).includes(actor.id)
-      );
+      return actor.roles.includes('laser-supervisor') && supervisorsOf(laser).includes(actor.id);
     default:
       return false;
   }
@@ -138,7 +142,8 @@ function supervisorsOf(laser: LaserRecord): readonly string[] {
 
 function guards(): Readonly<Record<LaserGuard, LaserGuardCheck>> {
   return {
-    'reason-given': (_, { input }) => when(input !== undefined && !input.reason, 'Give the reason.'),
+    'reason-given': (_, { input }) =>
+      when(input !== undefined && !input.reason, 'Give the reason.'),
     'class-and-room-named': ({ laser: { input } }) => [
       ...when(!input.declaredClass, 'Name the class that is expected.'),
       ...when(!input.areaId, 'Name the room.'),
@@ -235,7 +240,10 @@ function guards(): Readonly<Record<LaserGuard, LaserGuardCheck>> {
 function notRecorded(guard: LaserGuard): LaserGuardCheck {
   const words = NOT_RECORDED_GUARDS[guard] ?? 'This is not recorded here.';
   return ({ laser, today }) =>
-    when(!(laser.waiver && laser.waiver.untilOn >= today && laser.waiver.missing.includes(words)), words);
+    when(
+      !(laser.waiver && laser.waiver.untilOn >= today && laser.waiver.missing.includes(words)),
+      words,
+    );
 }
 
 /** Every field that a complete record lacks; lines are complete when the engine can take them. */
@@ -250,10 +258,7 @@ export function missingInRecord(laser: LaserRecord): string[] {
   return [
     ...when(!input.areaId && !input.mobile, 'Name the area, or say that the laser is mobile.'),
     ...when(placementOf(laser).supervisorIds.length === 0, 'Name the supervisor.'),
-    ...when(
-      !input.declaredClass && !input.homeBuilt,
-      'Enter the class that the maker declares.',
-    ),
+    ...when(!input.declaredClass && !input.homeBuilt, 'Enter the class that the maker declares.'),
     ...when(input.emissions.length === 0, 'Enter at least one line.'),
     ...lines,
   ];
@@ -300,12 +305,19 @@ async function mark(ctx: Context, subject: LaserSubject, marks: LaserMarks): Pro
 async function move(ctx: Context, subject: LaserSubject, area: PlaceOf): Promise<LaserSubject> {
   const { laser } = subject;
   const at = ctx.now.toISOString();
-  // The supervisors named on the laser were those of the old place.
-  const { supervisorId: _old, alternateId: _alternate, ...kept } = laser.input;
-  const input = { ...kept, areaId: area.id };
+  const input = { ...withoutSupervisors(laser.input), areaId: area.id };
   await updateLaserInput(ctx.tx, laser, { input, tag: laser.tag, area, at });
   await addPlace(ctx.tx, { laserId: laser.id, areaId: area.id, at });
   return reread(ctx, subject);
+}
+
+/** Those named on the laser were those of the old place. */
+function withoutSupervisors({
+  supervisorId: _supervisor,
+  alternateId: _alternate,
+  ...kept
+}: LaserInput) {
+  return kept;
 }
 
 async function reread(ctx: Context, subject: LaserSubject): Promise<LaserSubject> {

@@ -1,21 +1,33 @@
 import type { LaserFilter, LaserListQuery, LaserPage } from '@shared/model/lasers';
-import { classRank } from '@shared/model/laser-summary';
 import { type SelectQueryBuilder, sql, type SqlBool } from 'kysely';
 
 import type { Reach } from '../../auth/scope';
 import type { Tx } from '../../db/database';
 import { countRows, type Page, pageByKey, type SortKey } from '../../db/paging';
 import { matches } from '../../db/sql-helpers';
-import { NO_ATTENTION } from './laser-attention';
 import type { LaserRecord } from './laser-record';
 import { selectLasers, toLaser } from './laser-repository';
-import { readSearch } from './laser-search-words';
+import { NO_ATTENTION } from './laser-table';
 
 type Lasers = ReturnType<typeof selectLasers>;
-type Row = Lasers extends SelectQueryBuilder<infer _DB, infer _TB, infer R> ? R : never;
-type Scoped = Lasers extends SelectQueryBuilder<infer DB, infer TB, infer _R>
-  ? SortKey<DB, TB, Row>
-  : never;
+type Row = Awaited<ReturnType<Lasers['execute']>>[number];
+type Key =
+  Lasers extends SelectQueryBuilder<infer DB, infer TB, Row> ? SortKey<DB, TB, Row> : never;
+
+/** A search as understood: every part must hold. */
+export interface LaserSearch {
+  /** Bands that a line or tuning range must meet. */
+  readonly bands: readonly { readonly fromNm: number; readonly toNm: number }[];
+  /** Classes, verified before declared. */
+  readonly classes: readonly string[];
+  /** Beginnings of words of tag, serial, maker, model, or parts of the area's code, name, room. */
+  readonly words: readonly string[];
+}
+
+/** The filter with its search understood. */
+export type RegisterFilter = Omit<LaserFilter, 'q'> & { readonly search?: LaserSearch | undefined };
+export type RegisterQuery = RegisterFilter &
+  Pick<LaserListQuery, 'sort' | 'order' | 'limit' | 'after'>;
 
 export interface RegisterPage extends Page<LaserRecord> {
   readonly counts: LaserPage['counts'];
@@ -25,7 +37,7 @@ export interface RegisterPage extends Page<LaserRecord> {
 export async function listLasers(
   tx: Tx,
   reach: Reach,
-  query: LaserListQuery,
+  query: RegisterQuery,
 ): Promise<RegisterPage> {
   const found = filtered(within(selectLasers(tx), reach), query);
   const page = await pageByKey(found, {
@@ -45,7 +57,7 @@ export async function listLasers(
 export async function* eachLaser(
   tx: Tx,
   reach: Reach,
-  filter: LaserFilter,
+  filter: RegisterFilter,
 ): AsyncGenerator<LaserRecord> {
   const found = filtered(within(selectLasers(tx), reach), filter);
   let after: string | undefined;
@@ -64,7 +76,11 @@ export async function* eachLaser(
 /** Lasers with this serial, in whatever spelling. */
 export async function findBySerial(
   tx: Tx,
-  { key, maker, exceptId }: { key: string; maker?: string | undefined; exceptId?: string | undefined },
+  {
+    key,
+    maker,
+    exceptId,
+  }: { key: string; maker?: string | undefined; exceptId?: string | undefined },
 ): Promise<LaserRecord[]> {
   let found = selectLasers(tx).where('lasers.serial_key', '=', key);
   if (maker) found = found.where('lasers.maker', '=', maker);
@@ -73,7 +89,7 @@ export async function findBySerial(
   return rows.map((row) => toLaser(row));
 }
 
-/** Lasers whose state is one of these, or whose waiver has ended before a day. */
+/** Lasers in use whose waiver has ended before a day. */
 export async function lasersWithEndedWaiver(tx: Tx, today: string): Promise<{ id: string }[]> {
   return tx
     .selectFrom('lasers')
@@ -89,11 +105,7 @@ export function allLaserIds(tx: Tx): Promise<{ id: string }[]> {
 }
 
 export function laserIdsOfArea(tx: Tx, areaId: string): Promise<{ id: string }[]> {
-  return tx
-    .selectFrom('lasers')
-    .select('lasers.id')
-    .where('lasers.area_id', '=', areaId)
-    .execute();
+  return tx.selectFrom('lasers').select('lasers.id').where('lasers.area_id', '=', areaId).execute();
 }
 
 async function countLasers(tx: Tx, reach: Reach): Promise<LaserPage['counts']> {
@@ -144,7 +156,7 @@ function here(lasers: Lasers): Lasers {
   ]);
 }
 
-function filtered(lasers: Lasers, filter: LaserFilter): Lasers {
+function filtered(lasers: Lasers, filter: RegisterFilter): Lasers {
   let found = filter.state ? lasers.where('lasers.state', '=', filter.state) : here(lasers);
   if (filter.areaId) found = found.where('lasers.area_id', '=', filter.areaId);
   if (filter.department) {
@@ -156,7 +168,7 @@ function filtered(lasers: Lasers, filter: LaserFilter): Lasers {
     found = meeting(found, { fromNm: filter.fromNm ?? 0, toNm: filter.toNm ?? 1e6 });
   }
   if (filter.attention) found = needing(found, filter.attention);
-  return filter.q ? searched(found, filter.q) : found;
+  return filter.search ? searched(found, filter.search) : found;
 }
 
 function supervisedBy(lasers: Lasers, personId: string): Lasers {
@@ -169,11 +181,7 @@ function supervisedBy(lasers: Lasers, personId: string): Lasers {
 }
 
 function ofClass(lasers: Lasers, laserClass: string): Lasers {
-  return lasers.where(
-    sql`coalesce(lasers.verified_class, lasers.declared_class)`,
-    '=',
-    laserClass,
-  );
+  return lasers.where(sql`coalesce(lasers.verified_class, lasers.declared_class)`, '=', laserClass);
 }
 
 function meeting(lasers: Lasers, { fromNm, toNm }: { fromNm: number; toNm: number }): Lasers {
@@ -202,8 +210,7 @@ function needing(lasers: Lasers, attention: NonNullable<LaserFilter['attention']
   }
 }
 
-function searched(lasers: Lasers, text: string): Lasers {
-  const { bands, classes, words } = readSearch(text);
+function searched(lasers: Lasers, { bands, classes, words }: LaserSearch): Lasers {
   let found = lasers;
   for (const band of bands) found = meeting(found, band);
   for (const laserClass of classes) found = ofClass(found, laserClass);
@@ -231,13 +238,13 @@ function withWord(lasers: Lasers, word: string): Lasers {
   );
 }
 
-function keysOf({ sort, order }: Pick<LaserListQuery, 'sort' | 'order'>): Scoped[] {
-  const key = (column: unknown, value: (row: Row) => string | number): Scoped =>
-    ({ column, direction: order, value }) as Scoped;
+function keysOf({ sort, order }: Pick<LaserListQuery, 'sort' | 'order'>): Key[] {
+  const key = (column: unknown, value: (row: Row) => string | number): Key =>
+    ({ column, direction: order, value }) as Key;
   const byTag = [
     { column: 'lasers.tag_key', direction: 'asc', value: (row: Row) => row.tag_key },
     { column: 'lasers.id', direction: 'asc', value: (row: Row) => row.id },
-  ] as Scoped[];
+  ] as Key[];
   switch (sort) {
     case 'attention':
       return [key('lasers.attention_rank', (row) => row.attention_rank), ...byTag];
@@ -246,7 +253,10 @@ function keysOf({ sort, order }: Pick<LaserListQuery, 'sort' | 'order'>): Scoped
     case 'maker':
       return [key('lasers.maker', (row) => row.maker), ...byTag];
     case 'area':
-      return [key(sql`coalesce(areas.code, '') collate nocase`, (row) => row.area_code ?? ''), ...byTag];
+      return [
+        key(sql`coalesce(areas.code, '') collate nocase`, (row) => row.area_code ?? ''),
+        ...byTag,
+      ];
     case 'class':
       return [key('lasers.class_rank', (row) => row.class_rank), ...byTag];
     case 'wavelength':
@@ -259,15 +269,3 @@ function keysOf({ sort, order }: Pick<LaserListQuery, 'sort' | 'order'>): Scoped
       return [key('lasers.state', (row) => row.state), ...byTag];
   }
 }
-
-/** The highest class of an area's lasers, verified before declared. */
-export async function highestClassOf(tx: Tx, areaId: string): Promise<string | undefined> {
-  const rows = await tx
-    .selectFrom('lasers')
-    .select([sql<string | null>`coalesce(lasers.verified_class, lasers.declared_class)`.as('class')])
-    .where('lasers.area_id', '=', areaId)
-    .execute();
-  const classes = rows.flatMap((row) => row.class ?? []);
-  return classes.sort((a, b) => classRank(b as never) - classRank(a as never))[0];
-}
-

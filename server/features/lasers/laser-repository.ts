@@ -13,7 +13,7 @@ import {
   type StoredWaiver,
   tagKey,
 } from './laser-record';
-import type { EvaluationStanding, LaserTable } from './laser-table';
+import { type EvaluationStanding, type LaserTable, NO_ATTENTION } from './laser-table';
 
 /** A laser without any line sorts behind all others. */
 const NO_WAVELENGTH_NM = 1e9;
@@ -58,7 +58,11 @@ export async function findLaser(tx: Tx, id: string): Promise<LaserRecord | undef
 }
 
 export function findLaserIdByTag(tx: Tx, tag: string): Promise<{ id: string } | undefined> {
-  return tx.selectFrom('lasers').select('lasers.id').where('lasers.tag', '=', tag).executeTakeFirst();
+  return tx
+    .selectFrom('lasers')
+    .select('lasers.id')
+    .where('lasers.tag', '=', tag)
+    .executeTakeFirst();
 }
 
 /** The next free number of tags like L-43. */
@@ -106,7 +110,7 @@ export async function insertLaser(tx: Tx, laser: NewLaser): Promise<void> {
       reach: null,
       eye_distance_m: -1,
       optical_density: -1,
-      attention_rank: 99,
+      attention_rank: NO_ATTENTION,
       created_by: laser.createdBy,
       created_at: laser.at,
       updated_at: laser.at,
@@ -201,7 +205,11 @@ export async function addPlace(
 }
 
 export async function findPlace(tx: Tx, areaId: string): Promise<PlaceOf | undefined> {
-  const row = await tx.selectFrom('areas').selectAll().where('areas.id', '=', areaId).executeTakeFirst();
+  const row = await tx
+    .selectFrom('areas')
+    .selectAll()
+    .where('areas.id', '=', areaId)
+    .executeTakeFirst();
   return row && placeOf(row);
 }
 

@@ -1,14 +1,6 @@
 import { LASER_CLASSES } from '@shared/model/lasers';
 
-/** A search as understood: every part must hold. */
-export interface LaserSearch {
-  /** Bands that a line or tuning range must meet. */
-  readonly bands: readonly { readonly fromNm: number; readonly toNm: number }[];
-  /** Classes, verified before declared. */
-  readonly classes: readonly string[];
-  /** Beginnings of words of tag, serial, maker, model, or parts of the area's code, name, room. */
-  readonly words: readonly string[];
-}
+import type { LaserSearch } from './laser-queries';
 
 /** Class words that nobody would mean as anything else; "4" alone may be part of a model. */
 const CLASS_WORDS = new Map(
@@ -41,7 +33,11 @@ export function readSearch(text: string): LaserSearch {
 }
 
 /** "532" means 531.5 up to 532.5; "632.8" means 632.75 up to 632.85. */
-function bandOf(from: string, to: string | undefined, scale: number): { fromNm: number; toNm: number } {
+function bandOf(
+  from: string,
+  to: string | undefined,
+  scale: number,
+): { fromNm: number; toNm: number } {
   const halfStep = (digits: string) => 0.5 * 10 ** -(digits.split('.')[1]?.length ?? 0);
   const last = to ?? from;
   return {

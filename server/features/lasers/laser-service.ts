@@ -9,6 +9,7 @@ import type {
   LaserTransition,
 } from '@shared/model/lasers';
 import type { FieldError } from '@shared/model/problem';
+import type { Action } from '@shared/permissions/permissions';
 import type { LaserEvent } from '@shared/workflow/laser-life-cycle';
 import type * as z from 'zod';
 
@@ -39,6 +40,7 @@ import {
   updateLaserInput,
   updateLaserMarks,
 } from './laser-repository';
+import { readSearch } from './laser-search-words';
 import { hashOfInputs, refreshStanding, requireLaser, siteToday } from './laser-standing-service';
 import { enterRegister, moveLaser } from './laser-transition-service';
 import { laserRow, laserView } from './laser-view';
@@ -46,14 +48,14 @@ import { laserRow, laserView } from './laser-view';
 type Entrance = Extract<LaserEvent, 'register' | 'declare-found' | 'request-purchase'>;
 
 export async function readLasers(ctx: Context, query: LaserListQuery): Promise<LaserPage> {
-  const page = await listLasers(ctx.tx, reachOf(ctx, 'laser.read'), query);
+  const page = await listLasers(ctx.tx, reachOf(ctx, 'laser.read'), understood(query));
   const today = await siteToday(ctx);
   return { ...page, rows: page.rows.map((laser) => laserRow(laser, today)) };
 }
 
 /** Every laser within reach that the filter finds, for an export. */
 export function eachLaserInReach(ctx: Context, filter: LaserFilter): AsyncGenerator<LaserRecord> {
-  return eachLaser(ctx.tx, reachOf(ctx, 'laser.read'), filter);
+  return eachLaser(ctx.tx, reachOf(ctx, 'laser.read'), understood(filter));
 }
 
 /** Lasers that the person answers for and that something waits for, worst first. */
@@ -170,18 +172,17 @@ export async function transitionLaser(
   { version, step }: { version: number; step: LaserTransition },
 ): Promise<Laser> {
   const before = await requireReadable(ctx, id);
-  const places = [placementOf(before)];
-  if (before.transferArea) places.push(placementOfArea(before.transferArea));
-  const [place, ...others] = places;
-  if (!others.some((other) => isInScope(ctx, 'laser.transition', other))) {
-    requireScope(ctx, 'laser.transition', { place: place!, what: 'laser' });
-  }
+  requireScopeEither(ctx, 'laser.transition', before);
   requireVersion(before, version);
   const { event, reason, waiver, areaId } = step;
   const area = areaId === undefined ? undefined : await requirePlace(ctx, areaId);
   await moveLaser(ctx, before, {
     event,
-    input: { ...(reason ? { reason } : {}), ...(waiver ? { waiver } : {}), ...(area ? { area } : {}) },
+    input: {
+      ...(reason ? { reason } : {}),
+      ...(waiver ? { waiver } : {}),
+      ...(area ? { area } : {}),
+    },
   });
   await follow(ctx, before);
   return laserView(ctx, await requireLaser(ctx, id));
@@ -209,12 +210,20 @@ export async function readDuplicates(
 /** A laser that the person may read; 404 otherwise. */
 export async function requireReadable(ctx: Context, id: string): Promise<LaserRecord> {
   const laser = await requireLaser(ctx, id);
-  const places = [placementOf(laser)];
-  if (laser.transferArea) places.push(placementOfArea(laser.transferArea));
-  if (!places.some((place) => isInScope(ctx, 'laser.read', place))) {
-    requireScope(ctx, 'laser.read', { place: places[0]!, what: 'laser' });
-  }
+  requireScopeEither(ctx, 'laser.read', laser);
   return laser;
+}
+
+/** While a laser is handed over, both areas reach it. */
+function requireScopeEither(ctx: Context, action: Action, laser: LaserRecord): void {
+  const { transferArea } = laser;
+  if (transferArea && isInScope(ctx, action, placementOfArea(transferArea))) return;
+  requireScope(ctx, action, { place: placementOf(laser), what: 'laser' });
+}
+
+/** The filter with its words of search understood. */
+function understood<F extends LaserFilter>({ q, ...filter }: F) {
+  return { ...filter, search: q ? readSearch(q) : undefined };
 }
 
 /** Evaluations and the standing follow, in the same transaction, what the laser has become. */
@@ -312,5 +321,7 @@ function withoutBlanks(input: LaserInput): LaserInput {
 }
 
 function filled<T extends object>(record: T): T {
-  return Object.fromEntries(Object.entries(record).filter(([, value]) => value !== '' && value !== undefined)) as T;
+  return Object.fromEntries(
+    Object.entries(record).filter(([, value]) => value !== '' && value !== undefined),
+  ) as T;
 }

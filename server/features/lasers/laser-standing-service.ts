@@ -40,10 +40,7 @@ export async function siteToday(ctx: Dated): Promise<LocalDate> {
 }
 
 /** The laser with the facts that its guards look at. */
-export async function laserSubject(
-  ctx: Dated,
-  laser: LaserRecord,
-): Promise<LaserSubject> {
+export async function laserSubject(ctx: Dated, laser: LaserRecord): Promise<LaserSubject> {
   const sealed = await findSealedEvaluation(ctx.tx, laser.id);
   const inputsEqualSealed = sealed?.laser_inputs_hash === hashOfInputs(laser);
   return {

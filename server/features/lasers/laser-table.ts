@@ -48,8 +48,10 @@ export interface LaserTable {
   version: number;
 }
 
-export const EVALUATION_STANDINGS = ['none', 'open', 'approved', 'stale'] as const;
-export type EvaluationStanding = (typeof EVALUATION_STANDINGS)[number];
+export type EvaluationStanding = 'none' | 'open' | 'approved' | 'stale';
+
+/** Attention rank of a laser that nothing waits for. */
+export const NO_ATTENTION = 99;
 
 export interface LaserLineTable {
   laser_number: number;

@@ -141,8 +141,7 @@ export const LASERS_ROUTES = [
     multipart: { maxBytes: MAX_FILE_BYTES, kinds: ['pdf', 'png', 'jpeg', 'webp'] },
     limit: 'upload',
     status: 201,
-    handler: ({ ctx, params, body, upload }) =>
-      attachFile(ctx, params.id, { upload, input: body }),
+    handler: ({ ctx, params, body, upload }) => attachFile(ctx, params.id, { upload, input: body }),
   }),
   route({
     method: 'get',

@@ -34,6 +34,13 @@ async function run(config: Config): Promise<void> {
   void product.jobs.tick();
   greet(config, setupToken);
   stopOn(['SIGTERM', 'SIGINT'], () => stop(server, product));
+  for (const event of ['uncaughtException', 'unhandledRejection'] as const) {
+    process.once(event, (error: unknown) => {
+      // The state of the process is unknown: finish what is under way, then let it be restarted.
+      log.fatal({ err: error }, 'unexpected failure; stopping');
+      void stop(server, product).finally(() => process.exit(1));
+    });
+  }
 }
 
 function listen(server: Server, { port, host }: Config): Promise<void> {

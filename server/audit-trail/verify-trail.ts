@@ -39,7 +39,9 @@ export async function verifyTrail(edges: Pick<Edges, 'db' | 'heads'>): Promise<T
     shortenedFile(stored, filed),
     missingTriggers(edges.db),
   ].filter((problem) => problem !== null);
-  const [firstBad = null] = problems.sort((a, b) => a.sequence - b.sequence);
+  // What is wrong with an entry says more than what is wrong around the trail (sequence 0).
+  const place = (bad: Bad): number => bad.sequence || Infinity;
+  const [firstBad = null] = problems.sort((a, b) => place(a) - place(b));
   return {
     intact: firstBad === null,
     entries: chain.entries,

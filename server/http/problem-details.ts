@@ -1,8 +1,18 @@
-import { type Problem, PROBLEMS } from '@shared/model/problem';
+import { type Problem, type ProblemName, PROBLEMS } from '@shared/model/problem';
 import type { ErrorRequestHandler } from 'express';
 import type { Logger } from 'pino';
 
+import { actorOf } from '../auth/gate';
 import { ApiError, InvalidInput, TooLarge, Unavailable, UnsupportedMedia } from './errors';
+
+/** Refusals that may be somebody trying what is not theirs. */
+const WATCHED: ReadonlySet<ProblemName> = new Set([
+  'not-signed-in',
+  'not-allowed',
+  'cross-site',
+  'proof-failed',
+  'too-many',
+]);
 
 /** Answers everything thrown as RFC 9457 problem details; what nobody expected is logged once. */
 export function problemDetails(log: Logger): ErrorRequestHandler {
@@ -11,6 +21,11 @@ export function problemDetails(log: Logger): ErrorRequestHandler {
     const requestId = String(req.id);
     const known = asApiError(error);
     if (!known) log.error({ err: error, requestId }, 'request failed');
+    else if (WATCHED.has(known.problem)) {
+      const { ip, method, path } = req;
+      const actorId = actorOf(req)?.id;
+      log.warn({ event: known.problem, requestId, ip, method, path, actorId }, 'refused');
+    }
     if (res.headersSent) {
       res.destroy();
       return;

@@ -40,7 +40,7 @@ describe(`the engine considers every limit that the model finds (seed ${SEED})`,
     let found = 0;
     for (const drawn of CASES.slice(0, 150)) {
       if (drawn.path?.kind === 'diffuse') continue;
-      const perBeam = new HazardModel(drawn).evaluate(side).perBeam;
+      const perBeam = new HazardModel(drawn).perBeam(side);
       const result = resultOf(drawn)[side].perBeam;
       perBeam.forEach(({ all }, i) => {
         for (const compared of all.filter((one) => !addsNothing(one, all))) {

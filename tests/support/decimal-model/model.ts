@@ -1,7 +1,7 @@
 import { axes, type ModelBeam, type ModelCase, type ModelPath } from './case';
 import { Dec, ONE, PI, ZERO, dec, maxOf, minOf } from './decimal';
 import { airTransmission, apertureFraction, isGaussian, widthsAt, type Growth } from './geometry';
-import { SMALL, type Side, type Source } from './limits';
+import { SMALL, alphaMax, factor, type Side, type Source } from './limits';
 import { candidatesOf, type Candidate } from './pulses';
 
 /** How an exposure is looked at. */
@@ -52,8 +52,8 @@ export class HazardModel {
   }
 
   evaluate(side: Side): ModelSideResult {
-    const { beams, at, aid } = this.hazardCase;
-    const perBeam = beams.map((beam) => this.beamResult(beam, side));
+    const { at, aid } = this.hazardCase;
+    const perBeam = this.perBeam(side);
     const hazardDistanceM = this.distance(side, false);
     const aided = aid && side === 'eye' ? this.distance(side, true) : undefined;
     return {
@@ -65,6 +65,11 @@ export class HazardModel {
         ? { at: { opticalDensity: density(largestSum(perBeam.map((b) => b.at!.compared))) } }
         : {}),
     };
+  }
+
+  /** The beams one by one, without the distances of all. */
+  perBeam(side: Side): ModelBeamResult[] {
+    return this.hazardCase.beams.map((beam) => this.beamResult(beam, side));
   }
 
   private beamResult(beam: ModelBeam, side: Side): ModelBeamResult {
@@ -207,8 +212,8 @@ export class HazardModel {
     const cos = cosine(this.path.angleDeg);
     const scales = [ONE, cos, ONE.add(cos).div(2)];
     const magnify = this.hazardCase.aid ? [1, this.hazardCase.aid.magnification] : [1];
-    const steps = ['0.0015', '0.005', '0.011', '0.082', '0.1'].flatMap((alpha) =>
-      scales.flatMap((scale) => magnify.map((m) => spotM.mul(scale).mul(m).div(dec(alpha)))),
+    const steps = this.stepAnglesMrad().flatMap((alpha) =>
+      scales.flatMap((scale) => magnify.map((m) => spotM.mul(scale).mul(m).div(alpha).mul(1000))),
     );
     const sides = steps.flatMap((r) => [
       r,
@@ -218,7 +223,23 @@ export class HazardModel {
     const ladder: Dec[] = [];
     const top = maxOf(steps).mul(1.1);
     for (let r = spotM.div(100); r.lt(top); r = r.mul(1.3)) ladder.push(r);
-    return [...ladder, ...sides, top].sort((a, b) => a.cmp(b));
+    const sorted = [...ladder, ...sides, top].sort((a, b) => a.cmp(b));
+    return sorted.filter((r, i) => i === 0 || !r.eq(sorted[i - 1]!));
+  }
+
+  /** Angles at which a limit or its slope steps: of C_P, of IEC's footnote, alpha_max and gamma_ph. */
+  private stepAnglesMrad(): Dec[] {
+    const { ruleSet, beams, exposure } = this.hazardCase;
+    const durations = new Set([exposure.eyeS]);
+    for (const { emission } of beams) {
+      if (emission.mode !== 'cw') durations.add(emission.pulseDurationS);
+    }
+    const moving = [...durations].flatMap((durationS) => {
+      const reading = { ruleSet, wavelengthNm: 500, durationS, source: SMALL };
+      const gamma = factor('gamma_ph', reading);
+      return [alphaMax(reading), ...(gamma ? [gamma] : [])];
+    });
+    return [...['1.5', '5', '82', '100'].map(dec), ...moving];
   }
 
   /** The largest distance at which a sum over a tissue reaches one. */
@@ -230,7 +251,7 @@ export class HazardModel {
     const last = places[places.length - 1]!;
     if (sum(last).gte(1)) {
       let [low, high] = [last, maxOf([last.mul(2), dec('1e-3')])];
-      while (sum(high).gte(1)) [low, high] = [high, high.mul(2)];
+      while (sum(high).gte(1)) [low, high] = [high, high.mul(16)];
       return bisect(sum, low, high);
     }
     for (let i = places.length - 1; i > 0; i--) {
@@ -282,8 +303,8 @@ function density(ratio: Dec): Dec {
 }
 
 /**
- * Encloses the crossing of one until the ends agree to 1e-12: false position on the logarithms,
- * every third time and wherever that says nothing, the middle.
+ * Encloses the crossing of one until the ends agree to 1e-12: false position on the logarithms of
+ * both, every third time and wherever that says nothing, the middle.
  */
 function bisect(sum: (r: Dec) => Dec, from: Dec, to: Dec): Dec {
   let [low, high] = [from, to];
@@ -293,7 +314,7 @@ function bisect(sum: (r: Dec) => Dec, from: Dec, to: Dec): Dec {
     // A little beyond the guess, so that both ends move.
     const guess = Number.isFinite(part) ? Math.min(0.999, Math.max(1e-3, part)) : 0.5;
     const nudged = guess + (step % 2 === 0 ? 1e-3 : -1e-3) * Math.min(guess, 1 - guess);
-    const place = low.add(high.sub(low).mul(nudged));
+    const place = low.isZero() ? high.mul(nudged) : low.mul(high.div(low).toNumber() ** nudged);
     const value = sum(place);
     if (value.gte(1)) [low, above] = [place, excess(value)];
     else [high, below] = [place, excess(value)];
@@ -303,14 +324,22 @@ function bisect(sum: (r: Dec) => Dec, from: Dec, to: Dec): Dec {
 
 const excess = (value: Dec): number => Math.log(value.toNumber());
 
+/** Golden section, until the place is known to 1e-7: the top is flat, its value far better. */
 function goldenMaximum(f: (r: Dec) => Dec, from: Dec, to: Dec): Dec {
   const ratio = new Dec(5).sqrt().sub(1).div(2);
   let [low, high] = [from, to];
-  for (let i = 0; i < 60; i++) {
-    const left = high.sub(high.sub(low).mul(ratio));
-    const right = low.add(high.sub(low).mul(ratio));
-    if (f(left).gte(f(right))) high = right;
-    else low = left;
+  let [left, right] = [high.sub(high.sub(low).mul(ratio)), low.add(high.sub(low).mul(ratio))];
+  let [atLeft, atRight] = [f(left), f(right)];
+  while (high.sub(low).gt(high.mul(1e-7))) {
+    if (atLeft.gte(atRight)) {
+      [high, right, atRight] = [right, left, atLeft];
+      left = high.sub(high.sub(low).mul(ratio));
+      atLeft = f(left);
+    } else {
+      [low, left, atLeft] = [left, right, atRight];
+      right = low.add(high.sub(low).mul(ratio));
+      atRight = f(right);
+    }
   }
   return low.add(high).div(2);
 }

@@ -1,7 +1,6 @@
 import { open, rm } from 'node:fs/promises';
 
 import type { Request, Response } from 'express';
-import { fileTypeFromBuffer } from 'file-type';
 import multer from 'multer';
 
 import { InvalidInput, TooLarge, UnsupportedMedia } from './errors';
@@ -122,6 +121,8 @@ async function kindOf(
 
 async function kindByContent(path: string): Promise<UploadKind | undefined> {
   const head = await readHead(path, 8192);
+  // Loaded with the first upload: a start does not wait for it.
+  const { fileTypeFromBuffer } = await import('file-type');
   const found = await fileTypeFromBuffer(head);
   if (found) {
     return (Object.keys(MEDIA_TYPES) as UploadKind[]).find(

@@ -7,7 +7,7 @@ import { describeApi } from './open-api';
 /** The description of all routes, these two included. */
 export function apiDescriptionRoutes(others: readonly Route[]): Route[] {
   const all: Route[] = [];
-  let document: ReturnType<typeof describeApi> | undefined;
+  let document: Awaited<ReturnType<typeof describeApi>> | undefined;
   const own = [
     route({
       method: 'get',
@@ -15,8 +15,8 @@ export function apiDescriptionRoutes(others: readonly Route[]): Route[] {
       action: 'api-description.read',
       summary: 'The contract of the API, OpenAPI 3.1',
       output: json(z.record(z.string(), z.unknown())),
-      handler: ({ ctx }) => {
-        document ??= describeApi(all, ctx.edges.config.publicUrl);
+      handler: async ({ ctx }) => {
+        document ??= await describeApi(all, ctx.edges.config.publicUrl);
         return { ...document };
       },
     }),

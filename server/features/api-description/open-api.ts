@@ -1,21 +1,19 @@
 import { problemSchema } from '@shared/model/problem';
 import { isPublic } from '@shared/permissions/permissions';
 import * as z from 'zod';
-import {
-  createDocument,
-  type ZodOpenApiOperationObject,
-  type ZodOpenApiPathsObject,
-} from 'zod-openapi';
+import type { ZodOpenApiOperationObject, ZodOpenApiPathsObject } from 'zod-openapi';
 
 import { isMutating, type Output, type Route } from '../../http/route';
 
 /** The description of the API, made from the declared routes and nothing else. */
-export function describeApi(routes: readonly Route[], publicUrl: string) {
+export async function describeApi(routes: readonly Route[], publicUrl: string) {
   const paths: ZodOpenApiPathsObject = {};
   for (const route of routes) {
     const path = route.path.replaceAll(/:(\w+)/g, '{$1}');
     paths[path] = { ...paths[path], [route.method]: operationOf(route) };
   }
+  // Loaded when somebody asks: a start does not wait for it.
+  const { createDocument } = await import('zod-openapi');
   return createDocument({
     openapi: '3.1.0',
     info: {

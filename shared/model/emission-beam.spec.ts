@@ -179,6 +179,10 @@ describe('pulses', () => {
     expect(pulsed.beam.emission).toMatchObject({ mode: 'repetitive', pulseEnergyJ: 0.003 });
   });
 
+  it('of a scanned beam are evaluated as if it stood still', () => {
+    expect(beam({ scan: '200 Hz over 20 mrad' }).assumptions[0]).toMatch(/scan is not credited/);
+  });
+
   it('evaluate the maximum and only mention what is usual', () => {
     const found = beam({ operatingPowerW: q(3.5) });
     expect(found.beam.emission).toEqual({ mode: 'cw', powerW: 5 });

@@ -49,6 +49,11 @@ export function beamOf(
     return { ok: false, errors: notes.errors };
   }
   mentionOperatingPower(emission, notes);
+  if (emission.scan) {
+    notes.assumptions.push(
+      'The scan is not credited: evaluated as a beam that stands still, as after a failure.',
+    );
+  }
   const beam: Beam = {
     ...(emission.label ? { label: emission.label } : {}),
     wavelengthNm,

@@ -16,6 +16,7 @@ import type * as z from 'zod';
 import { changesBetween, recordChange } from '../../audit-trail/record-change';
 import { isInScope, reachOf, requireScope } from '../../auth/scope';
 import type { Context } from '../../context/context';
+import { transact } from '../../context/transact';
 import { newId } from '../../db/new-id';
 import { Conflict, InvalidInput } from '../../http/errors';
 import { requireVersion } from '../../http/etag';
@@ -41,7 +42,13 @@ import {
   updateLaserMarks,
 } from './laser-repository';
 import { readSearch } from './laser-search-words';
-import { hashOfInputs, refreshStanding, requireLaser, siteToday } from './laser-standing-service';
+import {
+  hashOfInputs,
+  laserSubject,
+  refreshStanding,
+  requireLaser,
+  siteToday,
+} from './laser-standing-service';
 import { enterRegister, moveLaser } from './laser-transition-service';
 import { laserRow, laserView } from './laser-view';
 
@@ -73,7 +80,13 @@ export async function readAttention(
 
 const ANSWERING: ReadonlySet<string> = new Set(['lso', 'deputy-lso', 'laser-supervisor']);
 
+/** Compares the hash of the inputs anew: a reach that no longer holds is stale before it is shown. */
 export async function readLaser(ctx: Context, id: string): Promise<Laser> {
+  const laser = await requireReadable(ctx, id);
+  const { inputsEqualSealed } = await laserSubject(ctx, laser);
+  if (laser.standing === 'approved' && !inputsEqualSealed) {
+    await transact(ctx.edges, ctx, (writing) => evaluationsFollowInputs(writing, id));
+  }
   return laserView(ctx, await requireReadable(ctx, id));
 }
 

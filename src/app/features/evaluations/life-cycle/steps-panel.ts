@@ -16,10 +16,19 @@ import type { Evaluation, EvaluationTransition } from '@shared/model/evaluations
 import type { OfferedEvent } from '@shared/model/lasers';
 import type { Problem } from '@shared/model/problem';
 import { statementOf } from '@shared/text/statements';
+import { EVALUATION_LIFE_CYCLE } from '@shared/workflow/evaluation-life-cycle';
+import { type Actor, transitionsFrom } from '@shared/workflow/machine';
 
 import { ConfirmDialog } from '../../../ui/confirm-dialog/confirm-dialog';
 import { Icon } from '../../../ui/icon/icon';
 import { PasswordPrompt } from '../../../ui/password-prompt/password-prompt';
+
+const ACTOR_WORDS: Readonly<Partial<Record<Actor, string>>> = {
+  lso: 'the laser safety officer',
+  'deputy-lso': 'a deputy',
+  committee: 'the committee',
+  supervisor: 'the laser supervisor',
+};
 
 const TITLES: Readonly<Record<string, string>> = {
   'send-to-check': 'Send to check',
@@ -70,6 +79,21 @@ export class StepsPanel {
       ...(checker ? [`checked by ${checker.name}`] : []),
       ...(approver ? [`signed by ${approver.name}`] : []),
     ].join(' · ');
+  });
+  /** Steps that others can take from here, and who they are. */
+  protected readonly forOthers = computed(() => {
+    const { state, offered, author } = this.evaluation();
+    return transitionsFrom(EVALUATION_LIFE_CYCLE, state)
+      .filter(({ event, actors }) => {
+        const isOffered = offered.some((offer) => offer.event === event);
+        return !isOffered && event !== 'input-changed' && actors.some((one) => one !== 'system');
+      })
+      .map(({ label, actors }) => ({
+        label,
+        who: actors
+          .flatMap((actor) => (actor === 'author' ? [author.name] : (ACTOR_WORDS[actor] ?? [])))
+          .join(' or '),
+      }));
   });
   protected readonly title = computed(() => {
     const event = this.chosen()?.event ?? this.others()[0]?.event ?? '';
@@ -122,19 +146,22 @@ export class StepsPanel {
       });
   }
 
-  protected sign(password: string, comment: string, reason: HTMLTextAreaElement | undefined): void {
+  protected sign(password: string): void {
     const offer = this.chosen();
     if (!offer) return;
-    this.missingReason.set(reason !== undefined && reason.value.trim().length < 10);
+    const reasonBox = this.reasonBox()?.nativeElement;
+    const reason = reasonBox?.value.trim() ?? '';
+    const comment = this.commentBox()?.nativeElement.value.trim() ?? '';
+    this.missingReason.set(reasonBox !== undefined && reason.length < 10);
     if (this.missingReason()) {
-      reason?.focus();
+      reasonBox?.focus();
       return;
     }
     this.stepped.emit({
       event: offer.event as EvaluationTransition['event'],
       password,
-      ...(comment.trim() ? { comment: comment.trim() } : {}),
-      ...(reason ? { reason: reason.value.trim() } : {}),
+      ...(comment ? { comment } : {}),
+      ...(reason ? { reason } : {}),
     });
   }
 }

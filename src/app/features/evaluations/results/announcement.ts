@@ -9,6 +9,8 @@ import type { Outcome } from './outcome';
 @Component({
   selector: 'lm-announcement',
   template: '<p class="lm-unseen" role="status">{{ words() }}</p>',
+  // Takes no place in the grid of the bench.
+  styles: ':host { position: absolute; }',
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class Announcement {

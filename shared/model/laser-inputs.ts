@@ -39,7 +39,7 @@ function withoutText({ text: _typed, ...quantity }: Quantity): Quantity {
   return quantity;
 }
 
-export function isQuantity(value: unknown): value is Quantity {
+function isQuantity(value: unknown): value is Quantity {
   return typeof value === 'object' && value !== null && 'value' in value && 'source' in value;
 }
 

@@ -29,7 +29,7 @@ interface SealDocument {
 }
 
 /** Everything of an evaluation that a signature vouches for. */
-export function signedContent(evaluation: EvaluationRecord) {
+function signedContent(evaluation: EvaluationRecord) {
   return {
     evaluationId: evaluation.id,
     laserId: evaluation.laserId,

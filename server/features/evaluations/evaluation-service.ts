@@ -185,7 +185,7 @@ export async function readSeal(ctx: Context, id: string): Promise<Download> {
 }
 
 /** An evaluation that the person may read, with its laser; 404 otherwise. */
-export async function requireReadable(ctx: Context, id: string): Promise<EvaluationSubject> {
+async function requireReadable(ctx: Context, id: string): Promise<EvaluationSubject> {
   const evaluation = await findEvaluation(ctx.tx, id);
   if (!evaluation) throw new NotFound('evaluation');
   const subject = await evaluationSubject(ctx, evaluation);

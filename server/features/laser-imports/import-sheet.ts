@@ -4,7 +4,7 @@ import { parse } from 'csv-parse/sync';
 import { columnOf, COLUMNS, type FoundColumn, NOT_READ } from './import-columns';
 import type { SheetRow } from './import-plan';
 
-export const MAX_ROWS = 2000;
+const MAX_ROWS = 2000;
 
 export interface Sheet {
   readonly rows: readonly SheetRow[];

@@ -247,7 +247,7 @@ function notRecorded(guard: LaserGuard): LaserGuardCheck {
 }
 
 /** Every field that a complete record lacks; lines are complete when the engine can take them. */
-export function missingInRecord(laser: LaserRecord): string[] {
+function missingInRecord(laser: LaserRecord): string[] {
   const { input } = laser;
   const lines = input.emissions.flatMap((emission) => {
     const at = emission.wavelengthToNm ? emission.wavelengthNm.value : undefined;

@@ -15,6 +15,9 @@ import { pino } from 'pino';
 import { afterEach, beforeEach, describe, expect, it } from 'vitest';
 
 import { databaseFile } from '../../server/db/open-database';
+import { acting, SYSTEM } from '../../server/context/context';
+import { transact } from '../../server/context/transact';
+import { seedInstitute } from '../../server/demo/demo-institute';
 import { isEmpty, seedDemo } from '../../server/demo/seed-demo';
 import { openEdges, openProduct } from '../../server/start';
 import { FakeClock } from '../support/fake-clock';
@@ -47,7 +50,7 @@ describe('a start', () => {
 
   it('on a trail that was altered is refused, and says where', async () => {
     const product = await open();
-    await seedDemo(product.edges);
+    await transact(product.edges, acting(SYSTEM, 'test'), seedInstitute);
     await product.close();
     const attacker = new BetterSqlite(databaseFile(dataDir));
     attacker.exec('drop trigger audit_trail_no_update');
@@ -59,7 +62,7 @@ describe('a start', () => {
 
   it('on a damaged file is refused', async () => {
     const product = await open();
-    await seedDemo(product.edges);
+    await transact(product.edges, acting(SYSTEM, 'test'), seedInstitute);
     await product.close();
     const handle = openSync(databaseFile(dataDir), 'r+');
     for (let page = 3; page < 40; page += 1)

@@ -8,7 +8,9 @@ import { pino } from 'pino';
 import { afterAll, beforeAll, expect, it } from 'vitest';
 
 import { databaseFile } from '../../server/db/open-database';
-import { seedDemo } from '../../server/demo/seed-demo';
+import { acting, SYSTEM } from '../../server/context/context';
+import { transact } from '../../server/context/transact';
+import { seedInstitute } from '../../server/demo/demo-institute';
 import { openProduct } from '../../server/start';
 import { FakeClock } from '../support/fake-clock';
 import { testConfig } from '../support/test-app';
@@ -18,7 +20,7 @@ beforeAll(async () => {
   dataDir = mkdtempSync(join(tmpdir(), 'limen-verify-'));
   const log = pino({ level: 'silent' });
   const product = await openProduct(testConfig(dataDir), { clock: new FakeClock().read, log });
-  await seedDemo(product.edges);
+  await transact(product.edges, acting(SYSTEM, 'test'), seedInstitute);
   await product.close();
 });
 afterAll(() => rmSync(dataDir, { recursive: true }));

@@ -78,4 +78,15 @@ describe('when the session has ended', () => {
     http.expectOne('/api/today').flush('read');
     expect(answers).toEqual(['read']);
   });
+
+  it('does not ask who has signed out', async () => {
+    const { http, client, renewal } = await signedIn();
+    TestBed.inject(CurrentSession).signOut().subscribe();
+    http.expectOne('/api/session').flush(null, { status: 204, statusText: '' });
+    const failures: unknown[] = [];
+    client.get('/api/today').subscribe({ error: (error: unknown) => failures.push(error) });
+    http.expectOne('/api/today').flush(ENDED, { status: 401, statusText: '' });
+    expect(failures).toHaveLength(1);
+    expect(renewal.isAsking()).toBe(false);
+  });
 });

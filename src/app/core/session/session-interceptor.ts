@@ -8,6 +8,7 @@ import { catchError, switchMap, tap, throwError } from 'rxjs';
 
 import { ProblemError } from '../http/problem-error';
 import { ASKS_FOR_SESSION } from './session-api';
+import { CurrentSession } from './current-session';
 import { SessionClock } from './session-clock';
 import { SessionRenewal } from './session-renewal';
 
@@ -15,6 +16,7 @@ import { SessionRenewal } from './session-renewal';
 export const sessionInterceptor: HttpInterceptorFn = (request, next) => {
   if (request.context.get(ASKS_FOR_SESSION)) return next(request);
   const clock = inject(SessionClock);
+  const session = inject(CurrentSession);
   const renewal = inject(SessionRenewal);
   const tokens = inject(HttpXsrfTokenExtractor);
   return next(request).pipe(
@@ -22,9 +24,9 @@ export const sessionInterceptor: HttpInterceptorFn = (request, next) => {
       if (event.type === HttpEventType.Response) clock.noteAnswer();
     }),
     catchError((error: unknown) => {
-      if (!(error instanceof ProblemError && error.is('not-signed-in'))) {
-        return throwError(() => error);
-      }
+      const hasEnded = error instanceof ProblemError && error.is('not-signed-in');
+      // Who has signed out on purpose is not asked again.
+      if (!hasEnded || !session.user()) return throwError(() => error);
       return renewal.renew().pipe(
         switchMap(() => {
           // Signing in again changes the token that the first try carried.

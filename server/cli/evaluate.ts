@@ -1,6 +1,6 @@
-import { once } from 'node:events';
 import { evaluate } from '@shared/hazard/evaluate';
 import { JsonElements } from './json-elements';
+import { Output } from './output';
 
 const HELP = `Evaluates laser hazard cases.
 
@@ -18,9 +18,6 @@ place; the others are still evaluated. The fields of cases and results: docs/eng
 
 Exit status: 0 all evaluated, 2 some cases had errors, 3 the input is not JSON, 1 wrong usage.
 `;
-
-/** Results are written in pieces of about this many characters. */
-const PIECE = 1 << 16;
 
 const counts = { cases: 0, errors: 0 };
 
@@ -44,7 +41,7 @@ async function evaluateInput(bare: boolean): Promise<void> {
     process.exit(error.code === 'EPIPE' ? 0 : 1);
   });
   try {
-    await writePieces(results(bare));
+    await answerAll(bare);
   } catch (error) {
     if (!(error instanceof SyntaxError)) throw error;
     process.stderr.write(`The input is not JSON: ${error.message}\n`);
@@ -57,17 +54,23 @@ async function evaluateInput(bare: boolean): Promise<void> {
   }
 }
 
-/** The results as text, with what stands between them. */
-async function* results(bare: boolean): AsyncGenerator<string> {
+/** Answers every case as it arrives. */
+async function answerAll(bare: boolean): Promise<void> {
   const elements = new JsonElements();
+  const output = new Output();
   process.stdin.setEncoding('utf8');
   for await (const text of process.stdin) {
-    for (const element of elements.push(text as string)) yield answer(element, elements, bare);
+    for (const element of elements.push(text as string)) {
+      output.add(answer(element, elements, bare));
+      if (output.isFull) await output.flush();
+    }
   }
-  for (const element of elements.end()) yield answer(element, elements, bare);
-  if (elements.isArray) yield counts.cases === 0 ? '[]\n' : '\n]\n';
+  for (const element of elements.end()) output.add(answer(element, elements, bare));
+  if (elements.isArray) output.add(counts.cases === 0 ? '[]\n' : '\n]\n');
+  await output.flush();
 }
 
+/** The result as text, with what stands before or after it. */
 function answer(element: string, { isArray }: JsonElements, bare: boolean): string {
   const result = evaluate(JSON.parse(element), { bare });
   counts.cases++;
@@ -75,18 +78,4 @@ function answer(element: string, { isArray }: JsonElements, bare: boolean): stri
   const text = JSON.stringify(result);
   if (!isArray) return `${text}\n`;
   return `${counts.cases === 1 ? '[\n' : ',\n'}${text}`;
-}
-
-/** Writes in pieces and waits while the reader is slower. */
-async function writePieces(texts: AsyncIterable<string>): Promise<void> {
-  let piece = '';
-  const write = async () => {
-    if (!process.stdout.write(piece)) await once(process.stdout, 'drain');
-    piece = '';
-  };
-  for await (const text of texts) {
-    piece += text;
-    if (piece.length >= PIECE) await write();
-  }
-  if (piece !== '') await write();
 }

@@ -22,7 +22,17 @@ export function installIfMissing() {
 
 export function buildIfOutdated() {
   const stamp = 'dist/built-from';
-  const sources = ['src', 'server', 'shared', 'migrations', 'public', 'angular.json', 'package-lock.json', 'tsconfig.json', 'tsconfig.app.json'];
+  const sources = [
+    'src',
+    'server',
+    'shared',
+    'migrations',
+    'public',
+    'angular.json',
+    'package-lock.json',
+    'tsconfig.json',
+    'tsconfig.app.json',
+  ];
   const newest = String(Math.max(...sources.map(newestChange)));
   if (existsSync(stamp) && readFileSync(stamp, 'utf8') === newest) return;
   run('npm', ['run', '--silent', 'build'], 'Building');
@@ -34,7 +44,10 @@ function newestChange(entry) {
   const status = statSync(entry, { throwIfNoEntry: false });
   if (!status) return 0;
   if (!status.isDirectory()) return status.mtimeMs;
-  return Math.max(status.mtimeMs, ...readdirSync(entry).map((name) => newestChange(path.join(entry, name))));
+  return Math.max(
+    status.mtimeMs,
+    ...readdirSync(entry).map((name) => newestChange(path.join(entry, name))),
+  );
 }
 
 function run(command, args, what) {

@@ -4,7 +4,7 @@ import { derive } from './derivation/derive';
 import { ENGINE_VERSION } from './engine-version';
 import { parseCase } from './parse-case';
 import { sideResult } from './side-result';
-import type { EvaluationErrors, EvaluationResult } from './result';
+import type { EvaluationErrors, EvaluationResult, Step } from './result';
 import { sceneOf } from './scene';
 import { sideHazard } from './side-hazard';
 import { warningsOf } from './warnings';
@@ -43,7 +43,9 @@ function evaluateCase(hazardCase: HazardCase, bare: boolean): EvaluationResult {
   const { ruleSet } = scene.rules;
   const eye = sideHazard(scene, 'eye');
   const skin = sideHazard(scene, 'skin');
+  const { id } = hazardCase;
   const result: EvaluationResult = {
+    ...(id === undefined ? undefined : { id }),
     ruleSet: hazardCase.ruleSet,
     edition: ruleSet.edition,
     engineVersion: ENGINE_VERSION,
@@ -53,8 +55,17 @@ function evaluateCase(hazardCase: HazardCase, bare: boolean): EvaluationResult {
     warnings: warningsOf(scene, eye, skin),
     cautions: cautionsOf(ruleSet),
   };
-  if (!bare) result.steps = derive(scene, eye, skin);
-  return hazardCase.id === undefined ? result : { id: hazardCase.id, ...result };
+  if (!bare) addSteps(result, () => derive(scene, eye, skin));
+  return result;
+}
+
+/** Adds the derivation. It is made when it is first read: most results are only looked at. */
+function addSteps(result: EvaluationResult, derivation: () => Step[]): void {
+  let steps: Step[] | undefined;
+  Object.defineProperty(result, 'steps', {
+    enumerable: true,
+    get: () => (steps ??= derivation()),
+  });
 }
 
 function outOfRange(id: string | undefined): EvaluationErrors {

@@ -9,7 +9,7 @@ import type {
 import { widthX, widthY, type BeamShape } from '../geometry/beam-shape';
 import { apertureMean, apertureArea } from '../geometry/beam-exposure';
 import type { SceneBeam } from '../scene';
-import type { StepWriter } from './step-writer';
+import type { StepDraft, StepWriter } from './step-writer';
 
 const SOURCE = 'engine:geometry';
 
@@ -80,29 +80,31 @@ export function writeFraction(
   distanceM: number,
   { symbol, apertureM }: { symbol: string; apertureM: number },
 ): void {
-  writer.write({
+  const formula = fractionFormula(shape, distanceM, symbol, apertureM);
+  const draft: StepDraft = {
     symbol: 'eta',
     what: 'Part of the beam that passes the aperture',
-    ...fractionFormula(shape, distanceM, symbol, apertureM),
+    formula: formula ?? `eta(${symbol},D_x,D_y)`,
     value: apertureMean(shape, apertureM, distanceM) * apertureArea(apertureM),
     unit: '1',
     source: SOURCE,
-  });
+  };
+  if (formula === undefined) writer.writeNumeric(draft);
+  else writer.write(draft);
 }
 
+/** The formula of a circular beam; an elliptical one is integrated. */
 function fractionFormula(
   shape: BeamShape,
   distanceM: number,
   symbol: string,
   apertureM: number,
-): { formula: string; isNumeric?: boolean } {
-  if (!shape.isCircular) return { formula: `eta(${symbol},D_x,D_y)`, isNumeric: true };
+): string | undefined {
+  if (!shape.isCircular) return undefined;
   const width = widthX(shape, distanceM);
-  if (width === 0) return { formula: '1' };
-  if (shape.profile === 'top-hat') return { formula: `min(1,${symbol}^2/D^2)` };
-  return (apertureM / width) ** 2 < SMALL
-    ? { formula: `-expm1(-${symbol}^2/D^2)` }
-    : { formula: `1-exp(-${symbol}^2/D^2)` };
+  if (width === 0) return '1';
+  if (shape.profile === 'top-hat') return `min(1,${symbol}^2/D^2)`;
+  return (apertureM / width) ** 2 < SMALL ? `-expm1(-${symbol}^2/D^2)` : `1-exp(-${symbol}^2/D^2)`;
 }
 
 function writeDirect(writer: StepWriter, beam: Beam, shape: BeamShape): void {

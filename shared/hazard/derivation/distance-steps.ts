@@ -88,11 +88,10 @@ function writeRoot(
   symbol: string,
   what: string,
 ): void {
-  all.write({
+  all.writeNumeric({
     symbol,
     what: `${what}, found as a root; the steps after it put it into the equation`,
     formula: `root(S(${symbol})=1)`,
-    isNumeric: true,
     value: distanceM,
     unit: 'm',
     source: SOURCE,

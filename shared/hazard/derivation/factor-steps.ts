@@ -1,9 +1,9 @@
 import { ALPHA_MIN_MRAD, isExtended, meanInside } from '../factors/apparent-source';
 import { breakTimeT2, T2_LARGEST_MRAD } from '../factors/break-time-t2';
 import { correctionFactorCE } from '../factors/correction-factor-ce';
-import { durationRowAt, factorValue } from '../factors/factor-value';
+import { durationRowAt, durationValue, factorValue } from '../factors/factor-value';
 import type { PrintedFactor } from '../limits/compiled-rule-set';
-import { alphaMax, coneFactor, gammaPh, tabulatedDuration } from '../limits/row-reading';
+import { alphaMax, coneFactor, tabulatedDuration } from '../limits/row-reading';
 import type { LimitCandidate, LimitSituation } from '../pulses/limit-candidates';
 import type { DurationRow, FactorRow } from '../rule-sets/limit-table';
 import type { RuleSet } from '../rule-sets/rule-set';
@@ -21,21 +21,13 @@ export function writeFactors(
   for (const factor of row.factors) writeWavelengthFactor(writer, ruleSet, situation, factor);
   if (row.growsWithSource) writeCE(writer, ruleSet, situation, candidate);
   if (row.hasT2 || row.printed.durationS.includes('T2')) writeT2(writer, ruleSet, situation);
-  if (row.printed.durationS.includes('T1')) {
-    writeFactorRow(writer, situation.point.band.t1, situation, {
-      symbol: symbols.T1,
-      what: 'Break time',
-      unit: 's',
-    });
-  }
+  if (row.printed.durationS.includes('T1')) writeT1(writer, ruleSet, situation);
   const isConed = row.mechanism === 'photochemical' && situation.point.band.isRetinal;
   const tabulatedS = tabulatedDuration(situation.point, candidate.durationS);
   if (isConed && coneFactor(situation.point, tabulatedS) > 1) {
-    writeDurationRow(writer, situation.point.band.gammaPh, tabulatedS, {
+    writeAngle(writer, situation.point.band.gammaPh, tabulatedS, {
       symbol: 'gamma_ph',
       what: 'Limiting cone of the photochemical limit, smaller than the source',
-      value: gammaPh(situation.point, tabulatedS),
-      unit: 'mrad',
     });
   }
 }
@@ -43,21 +35,17 @@ export function writeFactors(
 function writeWavelengthFactor(
   writer: StepWriter,
   { factors }: RuleSet,
-  situation: LimitSituation,
+  { point }: LimitSituation,
   { symbol, row }: PrintedFactor,
 ): void {
-  if (row !== undefined) {
-    const draft = { symbol: factors.symbols[symbol], what: FACTORS[symbol], unit: '1' };
-    writeFactorRow(writer, row, situation, draft);
-    return;
-  }
   writer.write({
     symbol: factors.symbols[symbol],
-    what: `${FACTORS[symbol]} (1 at this wavelength)`,
-    formula: '1',
-    value: 1,
+    what: FACTORS[symbol],
+    // Why: a factor without a row at this wavelength is 1.
+    formula: row === undefined ? '1' : printFactor(row),
+    value: row === undefined ? 1 : factorValue(row, point.wavelengthNm),
     unit: '1',
-    source: 'engine:reading',
+    source: row === undefined ? 'engine:reading' : row.source,
   });
 }
 
@@ -69,23 +57,32 @@ const FACTORS = {
   C2: 'Factor for ultraviolet',
 } as const;
 
-function writeFactorRow(
-  writer: StepWriter,
-  row: FactorRow | undefined,
-  { point }: LimitSituation,
-  draft: { symbol: string; what: string; unit: string },
-): void {
-  if (row === undefined) return;
+function writeT1(writer: StepWriter, { factors }: RuleSet, { point }: LimitSituation): void {
+  const { t1 } = point.band;
+  if (t1 === undefined) return;
   writer.write({
-    ...draft,
-    formula: printFactor(row),
-    value: factorValue(row, point.wavelengthNm),
-    source: row.source,
+    symbol: factors.symbols.T1,
+    what: 'Break time',
+    formula: printFactor(t1),
+    value: factorValue(t1, point.wavelengthNm),
+    unit: 's',
+    source: t1.source,
   });
 }
 
+const printedFactors = new Map<FactorRow, string>();
+
 /** `8+10^(0.04*(lambda-1250))`, from the same row as the number. */
-export function printFactor({ coefficient, decadesPerNm, originNm, plus }: FactorRow): string {
+export function printFactor(row: FactorRow): string {
+  let text = printedFactors.get(row);
+  if (text === undefined) {
+    text = factorText(row);
+    printedFactors.set(row, text);
+  }
+  return text;
+}
+
+function factorText({ coefficient, decadesPerNm, originNm, plus }: FactorRow): string {
   if (decadesPerNm === undefined) return `${coefficient}`;
   const difference =
     decadesPerNm < 0
@@ -95,16 +92,24 @@ export function printFactor({ coefficient, decadesPerNm, originNm, plus }: Facto
   return plus === undefined ? power : `${plus}+${power}`;
 }
 
-function writeDurationRow(
+/** An angle that depends on the duration. */
+function writeAngle(
   writer: StepWriter,
   rows: readonly DurationRow[],
   durationS: number,
-  draft: { symbol: string; what: string; value: number; unit: string },
+  { symbol, what }: { symbol: string; what: string },
 ): void {
   const row = durationRowAt(rows, durationS);
   if (row === undefined) return;
   writer.know('t', durationS);
-  writer.write({ ...draft, formula: printDurationRow(row), source: row.source });
+  writer.write({
+    symbol,
+    what,
+    formula: printDurationRow(row),
+    value: durationValue(row, durationS),
+    unit: 'mrad',
+    source: row.source,
+  });
 }
 
 /** C_E with the mean angle and α_max that it is made from. */
@@ -118,11 +123,9 @@ function writeCE(
   const largest = alphaMax(point, tabulatedS);
   const { CE } = ruleSet.factors.symbols;
   const source = point.band.alphaMax[0]?.source ?? 'engine:reading';
-  writeDurationRow(writer, point.band.alphaMax, tabulatedS, {
+  writeAngle(writer, point.band.alphaMax, tabulatedS, {
     symbol: 'alpha_max',
     what: 'Largest angle that the factor for extended sources grows with',
-    value: largest,
-    unit: 'mrad',
   });
   writer.write({
     symbol: 'alpha',
@@ -175,23 +178,24 @@ function writeConeForm(
 export function writeT2(writer: StepWriter, ruleSet: RuleSet, { point }: LimitSituation): void {
   const { T2 } = ruleSet.factors.symbols;
   const source = point.band.alphaMax[0]?.source ?? 'engine:reading';
-  const draft = { symbol: T2, what: 'Break time of the source', unit: 's', source };
-  if (!isExtended(point.source)) {
-    writer.write({ ...draft, formula: '10', value: 10 });
-    return;
+  const isByAngle = isExtended(point.source);
+  if (isByAngle) {
+    writer.write({
+      symbol: 'alpha_m',
+      what: 'Mean angle of the source, each axis inside [alpha_min, 100 mrad]',
+      formula: '(min(max(alpha_x,alpha_min),100)+min(max(alpha_y,alpha_min),100))/2',
+      value: meanInside(point.source, T2_LARGEST_MRAD),
+      unit: 'mrad',
+      source: 'engine:reading',
+    });
   }
   writer.write({
-    symbol: 'alpha_m',
-    what: 'Mean angle of the source, each axis inside [alpha_min, 100 mrad]',
-    formula: '(min(max(alpha_x,alpha_min),100)+min(max(alpha_y,alpha_min),100))/2',
-    value: meanInside(point.source, T2_LARGEST_MRAD),
-    unit: 'mrad',
-    source: 'engine:reading',
-  });
-  writer.write({
-    ...draft,
-    formula: '10*10^((alpha_m-alpha_min)/98.5)',
+    symbol: T2,
+    what: 'Break time of the source',
+    formula: isByAngle ? '10*10^((alpha_m-alpha_min)/98.5)' : '10',
     value: breakTimeT2(point.source),
+    unit: 's',
+    source,
   });
 }
 

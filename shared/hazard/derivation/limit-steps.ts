@@ -1,8 +1,10 @@
-import { ALPHA_MIN_MRAD } from '../factors/apparent-source';
+import { ALPHA_MIN_MRAD, isExtended } from '../factors/apparent-source';
 import { durationRowAt, durationValue } from '../factors/factor-value';
 import { comparableLimit } from '../limit-terms';
 import { tabulatedDuration } from '../limits/row-reading';
 import type { LimitCandidate, LimitSituation } from '../pulses/limit-candidates';
+import type { Mechanism } from '../result';
+import type { DurationRow } from '../rule-sets/limit-table';
 import type { RuleSet } from '../rule-sets/rule-set';
 import type { BeamHazard } from '../side-hazard';
 import { printDurationRow, writeFactors } from './factor-steps';
@@ -29,16 +31,18 @@ export function writeCandidates(
   writer.know('lambda', point.wavelengthNm);
   writer.know('T', exposureS);
   writer.know('t_0', point.shortestS);
-  writer.know('alpha_x', point.source.xMrad);
-  writer.know('alpha_y', point.source.yMrad);
-  writer.know('alpha_min', ALPHA_MIN_MRAD);
+  if (isExtended(point.source)) {
+    writer.know('alpha_x', point.source.xMrad);
+    writer.know('alpha_y', point.source.yMrad);
+    writer.know('alpha_min', ALPHA_MIN_MRAD);
+  }
   candidates.forEach((candidate, i) => {
     writeFactors(writer, ruleSet, situation, candidate);
     writePulses(writer, ruleSet, situation, candidate);
     writer.know('t', candidate.durationS);
     writer.write({
       symbol: `H_${i + 1}`,
-      what: `${RULES[candidate.rule]}, ${candidate.row.mechanism} limit read at ${candidate.durationS} s`,
+      what: LIMITS[candidate.rule][candidate.row.mechanism],
       formula: printCandidate(candidate, point, ruleSet.factors.symbols),
       value: candidate.limit,
       unit: 'J/m2',
@@ -47,12 +51,20 @@ export function writeCandidates(
   });
 }
 
-const RULES = {
-  continuous: 'The whole exposure',
-  'single-pulse': 'Every single pulse',
-  average: 'Each pulse by the average rule',
-  'pulse-train': 'Each pulse of the train',
+const LIMITS = {
+  continuous: limitsOf('Limit of the whole exposure'),
+  'single-pulse': limitsOf('Limit of every single pulse'),
+  average: limitsOf('Limit of each pulse by the average rule'),
+  'pulse-train': limitsOf('Limit of each pulse of the train'),
 } as const;
+
+function limitsOf(what: string): Readonly<Record<Mechanism, string>> {
+  return {
+    thermal: `${what}, thermal`,
+    photochemical: `${what}, photochemical`,
+    corneal: `${what}, front of the eye`,
+  };
+}
 
 /** Which candidate governs: the smallest, or the one that its own exposure exceeds most. */
 function writeGoverning(
@@ -100,9 +112,20 @@ export function writeAperture(
   writer.write({
     symbol: 'D_f',
     what: 'Limiting aperture',
-    formula: `1e-3*${printDurationRow(aperture)}`,
+    formula: printAperture(aperture),
     value: durationValue(aperture, tabulatedS) * 1e-3,
     unit: 'm',
     source: aperture.source,
   });
+}
+
+const printedApertures = new Map<DurationRow, string>();
+
+function printAperture(row: DurationRow): string {
+  let text = printedApertures.get(row);
+  if (text === undefined) {
+    text = `1e-3*${printDurationRow(row)}`;
+    printedApertures.set(row, text);
+  }
+  return text;
 }

@@ -1,26 +1,30 @@
-import type { FactorSymbols } from '../rule-sets/rule-set';
 import type { FactorSymbol, LimitRow } from '../rule-sets/limit-table';
+import type { FactorSymbols } from '../rule-sets/rule-set';
 import type { CompiledRow } from './compiled-rule-set';
-import { coneFactor, tabulatedDuration, type ReadingPoint } from './row-reading';
+
+/** How a row is read. */
+export interface WayOfReading {
+  /** Below the shortest duration t_0 of the tables: its irradiance is kept. */
+  readonly isHeld: boolean;
+  /** The source is larger than the cone γ_ph of the photochemical limit. */
+  readonly isConed: boolean;
+  readonly symbols: FactorSymbols;
+}
 
 /**
  * A row as plain mathematics, in J/m² over the duration: `18*C_A*t^0.75`. What it says is what
  * `radiantExposureLimit` computes, from the same data.
  */
 export function printLimit(
-  row: CompiledRow,
-  point: ReadingPoint,
-  durationS: number,
-  symbols: FactorSymbols,
+  { printed, isIrradiance }: CompiledRow,
+  { isHeld, isConed, symbols }: WayOfReading,
 ): string {
-  const tabulatedS = tabulatedDuration(point, durationS);
-  const isHeld = durationS < tabulatedS;
   const time = isHeld ? 't_0' : 't';
   const parts = [
-    ...printedNumber(row.printed, time),
-    ...(row.printed.factors ?? []).map((symbol) => factorText(symbol, symbols)),
-    ...(row.isIrradiance ? [time] : []),
-    ...coneText(row, point, tabulatedS),
+    ...printedNumber(printed, time),
+    ...(printed.factors ?? []).map((symbol) => factorText(symbol, symbols)),
+    ...(isIrradiance ? [time] : []),
+    ...(isConed ? ['max(1,alpha_x/gamma_ph)', 'max(1,alpha_y/gamma_ph)'] : []),
   ];
   return parts.join('*') + (isHeld ? '*t/t_0' : '');
 }
@@ -33,17 +37,9 @@ function printedNumber(row: LimitRow, time: string): string[] {
     return [...unit, `(${row.plus}+${[`${row.coefficient}`, ...power].join('*')})`];
   }
   const isOne = row.coefficient === 1 && (row.factors ?? []).length > 0;
-  return [...unit, ...(isOne ? [] : [`${row.coefficient}`]), ...power.slice(0, 1)];
+  return [...unit, ...(isOne ? [] : [`${row.coefficient}`]), ...power];
 }
 
 function factorText(symbol: FactorSymbol, symbols: FactorSymbols): string {
   return symbol === 'T2^-1/4' ? `${symbols.T2}^-0.25` : symbols[symbol];
-}
-
-/** The factor for a photochemical limit of a source larger than the cone γ_ph. */
-function coneText(row: CompiledRow, point: ReadingPoint, durationS: number): string[] {
-  const isLarge = row.mechanism === 'photochemical' && point.band.isRetinal;
-  return isLarge && coneFactor(point, durationS) > 1
-    ? ['max(1,alpha_x/gamma_ph)', 'max(1,alpha_y/gamma_ph)']
-    : [];
 }

@@ -75,6 +75,13 @@ describe('the main job: from a data sheet to a sealed evaluation', () => {
     expect(laser.reach?.lines).toHaveLength(1);
   });
 
+  it('a laser whose evaluation was signed before it was opened is evaluated at once', async () => {
+    const laserId = await newLaser();
+    await signed(team, laserId);
+    expect((await readLaser(team.lso, laserId)).state).toBe('received');
+    expect((await openForEvaluation(team, laserId)).state).toBe('evaluated');
+  });
+
   it('computes on the server what is saved, whatever was sent', async () => {
     const laserId = await openLaser();
     const evaluation = await draft(team, laserId);

@@ -189,7 +189,7 @@ export async function transitionLaser(
   requireVersion(before, version);
   const { event, reason, waiver, areaId } = step;
   const area = areaId === undefined ? undefined : await requirePlace(ctx, areaId);
-  await moveLaser(ctx, before, {
+  const moved = await moveLaser(ctx, before, {
     event,
     input: {
       ...(reason ? { reason } : {}),
@@ -197,8 +197,16 @@ export async function transitionLaser(
       ...(area ? { area } : {}),
     },
   });
+  if (event === 'open-evaluation') await closeIfEvaluated(ctx, moved);
   await follow(ctx, before);
   return laserView(ctx, await requireLaser(ctx, id));
+}
+
+/** The evaluation may have been signed before the LSO opened it: then the laser is evaluated. */
+async function closeIfEvaluated(ctx: Context, laser: LaserRecord): Promise<void> {
+  const { hasCurrentEvaluation } = await laserSubject(ctx, laser);
+  if (!hasCurrentEvaluation) return;
+  await moveLaser(ctx, laser, { event: 'evaluation-approved', input: {}, bySystem: true });
 }
 
 /** Other lasers with the same serial, whatever the spelling. */

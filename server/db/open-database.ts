@@ -68,13 +68,13 @@ export function openDatabase(file: string): Db {
       await reader.backup(toFile);
     },
     close: async () => {
+      // Kysely closes only a connection that it has used. The reader goes first: while it is open
+      // the log cannot be folded into the file.
       await read.destroy();
-      await write.destroy();
-      // Kysely closes only a connection that it has used.
       if (reader.open) reader.close();
-      if (!writer.open) return;
       writer.pragma('wal_checkpoint(TRUNCATE)');
-      writer.close();
+      await write.destroy();
+      if (writer.open) writer.close();
     },
   };
 }

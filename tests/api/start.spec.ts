@@ -48,6 +48,15 @@ describe('a start', () => {
     }
   });
 
+  it('leaves one whole file behind when it is closed', async () => {
+    const product = await open();
+    await transact(product.edges, acting(SYSTEM, 'test'), seedInstitute);
+    await product.close();
+    expect(readdirSync(dataDir).filter((name) => name.startsWith('limen.db'))).toEqual([
+      'limen.db',
+    ]);
+  });
+
   it('on a trail that was altered is refused, and says where', async () => {
     const product = await open();
     await transact(product.edges, acting(SYSTEM, 'test'), seedInstitute);

@@ -1,5 +1,5 @@
 import { ChangeDetectionStrategy, Component, computed, inject } from '@angular/core';
-import { Router } from '@angular/router';
+import { Router, RouterLink } from '@angular/router';
 import { ROLE_WORDS } from '@shared/model/people';
 
 import { Icon } from '../../ui/icon/icon';
@@ -16,7 +16,7 @@ const THEME_ICONS: Readonly<Record<ThemeName, IconName>> = {
 /** Who is signed in, in which role, at which site; theme and sign-out beside it. */
 @Component({
   selector: 'lm-user-block',
-  imports: [Icon],
+  imports: [Icon, RouterLink],
   templateUrl: './user-block.html',
   styleUrl: './user-block.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,

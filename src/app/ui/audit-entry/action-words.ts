@@ -24,16 +24,27 @@ const ACTIONS: Readonly<Record<string, string>> = {
   'settings.update': 'Changed the settings',
 };
 
-const EVENTS: ReadonlyMap<string, string> = new Map(
-  [EVALUATION_LIFE_CYCLE, LASER_LIFE_CYCLE].flatMap((machine) =>
-    machine.transitions.map((step) => [`${machine.name}:${step.event}`, step.label] as const),
-  ),
-);
-
-/** An action or event of the audit trail in words. */
-export function actionWords(action: string, recordKind: string): string {
-  const words = ACTIONS[action] ?? EVENTS.get(`${recordKind}:${action}`);
+/** An action or event of the audit trail in words; one event may be two steps by its state. */
+export function actionWords(action: string, recordKind: string, fromState?: string | null): string {
+  const words = ACTIONS[action] ?? stepWords(action, recordKind, fromState ?? 'start');
   if (words) return words;
   const plain = action.replace(/[.-]/g, ' ');
   return plain.charAt(0).toUpperCase() + plain.slice(1);
+}
+
+function stepWords(event: string, recordKind: string, state: string): string | undefined {
+  if (recordKind === 'laser') return labelOf(LASER_LIFE_CYCLE.transitions, event, state);
+  if (recordKind === 'evaluation') return labelOf(EVALUATION_LIFE_CYCLE.transitions, event, state);
+  return undefined;
+}
+
+function labelOf(steps: readonly Step[], event: string, state: string): string | undefined {
+  const named = steps.filter((step) => step.event === event);
+  return (named.find((step) => step.from.includes(state)) ?? named[0])?.label;
+}
+
+interface Step {
+  readonly event: string;
+  readonly from: readonly string[];
+  readonly label: string;
 }

@@ -38,7 +38,7 @@ export class AuditEntryView {
   readonly brief = input(false, { transform: booleanAttribute });
 
   protected readonly action = computed(() =>
-    actionWords(this.entry().action, this.entry().recordKind),
+    actionWords(this.entry().action, this.entry().recordKind, this.entry().fromState),
   );
   protected readonly who = computed(() => {
     const { actorName, actorRole, actingFor } = this.entry();

@@ -3,6 +3,7 @@ import type { Laser } from '@shared/model/lasers';
 import { siteDate } from '@shared/text/site-time';
 
 import { CurrentSession } from '../../../core/session/current-session';
+import { fileAddress } from '../lasers-api';
 
 interface Fact {
   readonly what: string;
@@ -28,6 +29,12 @@ const PATHS = { open: 'open', 'limited-open': 'limited open', enclosed: 'enclose
   template: `
     <div class="lm-panel">
       <h2 class="lm-unseen">Facts</h2>
+      @if (photo(); as file) {
+        <figure>
+          <img [src]="file.address" [alt]="file.words + ' of ' + laser().tag" />
+          <figcaption class="lm-label">{{ file.words }}, {{ file.date }}</figcaption>
+        </figure>
+      }
       <dl>
         <div>
           <dt>Class</dt>
@@ -76,6 +83,19 @@ const PATHS = { open: 'open', 'limited-open': 'limited open', enclosed: 'enclose
       white-space: pre-line;
     }
 
+    figure {
+      display: grid;
+      gap: 4px;
+      padding-block: 8px;
+    }
+
+    img {
+      inline-size: 100%;
+      max-block-size: 240px;
+      object-fit: contain;
+      background: var(--lm-well);
+    }
+
     .class {
       font: 500 1.0625rem/1.375rem var(--lm-serif);
     }
@@ -87,6 +107,17 @@ export class LaserFacts {
 
   readonly laser = input.required<Laser>();
 
+  protected readonly photo = computed(() => {
+    const { id, files } = this.laser();
+    const file = files.find(({ kind, mediaType }) => kind.endsWith('photo') && isImage(mediaType));
+    return (
+      file && {
+        address: fileAddress(id, file.id),
+        words: file.kind === 'photo' ? 'Photograph' : 'Photograph of the label',
+        date: this.date(file.uploadedAt),
+      }
+    );
+  });
   protected readonly classes = computed<Fact[]>(() => {
     const { declaredClass, verifiedClass, openClass, serviceClass } = this.laser();
     return present([
@@ -130,6 +161,10 @@ export class LaserFacts {
   private date(localDate: string | undefined): string | undefined {
     return localDate && siteDate(localDate, this.site()?.zone ?? 'UTC');
   }
+}
+
+function isImage(mediaType: string): boolean {
+  return mediaType.startsWith('image/');
 }
 
 function present(pairs: readonly (readonly [string, string | undefined])[]): Fact[] {

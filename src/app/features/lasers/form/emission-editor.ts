@@ -148,6 +148,12 @@ export class EmissionEditor {
     return used.size > 1 ? '' : ([...used][0] ?? value?.wavelengthNm.source ?? '');
   });
 
+  /** A line with something unreadable stays open: folded, what was typed would be lost. */
+  protected fold(): void {
+    if (this.isOpen() && this.form().invalid) this.form().markAllAsTouched();
+    else this.isOpen.update((isOpen) => !isOpen);
+  }
+
   protected setSource(text: string): void {
     const source = provenanceSchema.safeParse(text).data;
     if (!source) return;

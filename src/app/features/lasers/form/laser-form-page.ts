@@ -15,12 +15,14 @@ import { Title } from '@angular/platform-browser';
 import { Router, RouterLink } from '@angular/router';
 import type { PersonRef } from '@shared/model/common';
 import { type Laser, type LaserInput, laserInputSchema } from '@shared/model/lasers';
+import { scopeOf } from '@shared/permissions/permissions';
 import { debounceTime, EMPTY, map, startWith, switchMap } from 'rxjs';
 
 import { LocalDrafts } from '../../../core/drafts/local-drafts';
 import { filled } from '../../../core/forms/filled';
 import { RecordSave } from '../../../core/forms/record-save';
 import { asProblem } from '../../../core/http/problem-error';
+import { CurrentSession } from '../../../core/session/current-session';
 import { InstantPipe } from '../../../core/time/instant-pipe';
 import type { HoldsUnsavedChanges } from '../../../core/unsaved/unsaved-changes-guard';
 import { ProblemPanel } from '../../../ui/problem-panel/problem-panel';
@@ -80,6 +82,7 @@ export class LaserFormPage implements HoldsUnsavedChanges {
   private readonly drafts = inject(LocalDrafts);
   private readonly router = inject(Router);
   private readonly title = inject(Title);
+  private readonly session = inject(CurrentSession);
   private readonly fb = inject(NonNullableFormBuilder);
 
   readonly id = input<string>();
@@ -94,6 +97,11 @@ export class LaserFormPage implements HoldsUnsavedChanges {
   private readonly settings = settingsResource();
   protected readonly save = new RecordSave<Laser>();
   private readonly isSaved = signal(false);
+  /** The laser that was just declared found. */
+  protected readonly declared = signal<Laser | null>(null);
+  protected readonly mayOpen = computed(
+    () => scopeOf('laser.read', this.session.user()?.roles ?? []) === 'site',
+  );
 
   protected readonly source = linkedSignal<Laser | undefined>(() =>
     this.resource.hasValue() ? this.resource.value() : undefined,
@@ -183,7 +191,9 @@ export class LaserFormPage implements HoldsUnsavedChanges {
       done: (stored) => {
         this.isSaved.set(true);
         this.drafts.forget(this.draftName());
-        void this.router.navigate(['/lasers', stored.id]);
+        // Whoever finds a laser need not have a part in it and may not see its page.
+        if (this.found()) this.declared.set(stored);
+        else void this.router.navigate(['/lasers', stored.id]);
       },
     });
   }

@@ -1,8 +1,10 @@
 import {
+  type AbstractControl,
   type FormArray,
   type FormControl,
   type FormGroup,
   type NonNullableFormBuilder,
+  type ValidatorFn,
 } from '@angular/forms';
 import { emissionSchema, laserInputSchema, type LaserInput } from '@shared/model/lasers';
 
@@ -52,11 +54,11 @@ export function laserFormValue(form: LaserForm): LaserFormValue {
 
 export function emissionForm(fb: Fb, value: EmissionValue): EmissionForm {
   const quantities = Object.fromEntries(
-    QUANTITY_NAMES.map((name) => [name, quantityForm(fb, value[name])]),
+    QUANTITY_NAMES.map((name) => [
+      name,
+      quantityForm(fb, value[name], name === 'wavelengthNm' ? hasWavelength : undefined),
+    ]),
   ) as Record<QuantityName, QuantityForm>;
-  quantities.wavelengthNm.controls.value.addValidators(({ value: typed }) =>
-    typed === null ? { missing: 'Enter the wavelength, for example 532 nm.' } : null,
-  );
   return fb.group({
     ...quantities,
     id: fb.control(value.id),
@@ -92,9 +94,13 @@ export function emissionSetForm(fb: Fb, value: EmissionSetValue): EmissionSetFor
 export type EmissionList = FormArray<EmissionForm>;
 export type EmissionSetList = FormArray<EmissionSetForm>;
 
-function quantityForm(fb: Fb, value: QuantityValue): QuantityForm {
+function hasWavelength({ value }: AbstractControl<TypedQuantity | null>) {
+  return value === null ? { missing: 'Enter the wavelength, for example 532 nm.' } : null;
+}
+
+function quantityForm(fb: Fb, value: QuantityValue, rule?: ValidatorFn): QuantityForm {
   return fb.group({
-    value: fb.control<TypedQuantity | null>(value.value),
+    value: fb.control<TypedQuantity | null>(value.value, rule),
     source: fb.control(value.source),
     uncertaintyPct: fb.control<number | null>(value.uncertaintyPct, percent),
     calibratedOn: fb.control(value.calibratedOn),

@@ -74,11 +74,7 @@ export function pulseEnergyFromMeanPower(meanPowerW: number, repetitionRateHz: n
   };
 }
 
-/**
- * The emission of a mode-locked laser, from its mean power, rate and pulse duration.
- *
- * @example modeLockedEmission({ meanPowerW: 1, repetitionRateHz: 8e7, pulseDurationS: 1e-13 }).emission
- */
+/** The emission of a mode-locked laser, from its mean power, rate and pulse duration. */
 export function modeLockedEmission(laser: {
   readonly meanPowerW: number;
   readonly repetitionRateHz: number;
@@ -99,8 +95,6 @@ export function modeLockedEmission(laser: {
 /**
  * The emission of a laser that is switched on and off, from its peak power, its rate and either the
  * on-time or the duty (the part of the period that it is on, above 0 and up to 1).
- *
- * @example modulatedEmission({ peakPowerW: 2, modulationRateHz: 100, duty: 0.5 }).emission
  */
 export function modulatedEmission(
   laser: { readonly peakPowerW: number; readonly modulationRateHz: number } & (

@@ -33,7 +33,9 @@ export function proposedExposure(
   pathKind: Path['kind'],
 ): ProposedExposure {
   const [eyeS, reason] = proposal(wavelengthsNm, pathKind);
-  return { eyeS, skinS: skinDuration(eyeS), reason };
+  if (eyeS >= NEAR_INFRARED_S) return { eyeS, skinS: eyeS, reason };
+  // Why: the skin has no aversion to light; only movement ends its exposure.
+  return { eyeS, skinS: NEAR_INFRARED_S, reason: `${reason} The skin does not turn away: 10 s.` };
 }
 
 function proposal(
@@ -65,9 +67,4 @@ function proposal(
     AVERSION_S,
     '0.25 s: visible light, unintended viewing; turning away and blinking end the exposure.',
   ];
-}
-
-/** The skin has no aversion to light: at least the time of natural movement. */
-function skinDuration(eyeS: number): number {
-  return Math.max(eyeS, NEAR_INFRARED_S);
 }

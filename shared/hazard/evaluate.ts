@@ -15,11 +15,7 @@ export interface EvaluateOptions {
   readonly bare?: boolean;
 }
 
-/**
- * Evaluates one case. Never throws: what is wrong with the case comes back as field errors.
- *
- * @example evaluate({ ruleSet: 'ansi-z136.1-2014', … }) // { eye: { hazardDistanceM: 1414.4, … }, … }
- */
+/** Evaluates one case. Never throws: what is wrong with the case comes back as field errors. */
 export function evaluate(
   input: unknown,
   { bare = false }: EvaluateOptions = {},

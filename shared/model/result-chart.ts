@@ -7,7 +7,7 @@ import { formatQuantity } from './quantity-format';
 import { haveOneLimit, limitFigure, type LimitFigure, type ResultView } from './result-view';
 import { ruleSetById } from '../hazard/rule-sets';
 
-const POINTS_PER_DECADE = 40;
+const POINTS_PER_DECADE = 24;
 
 /** A skin limit is drawn only where the eye's curve meets it: apertures may differ near the exit. */
 const MEETS_WITHIN = 0.03;

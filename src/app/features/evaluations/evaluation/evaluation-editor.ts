@@ -37,6 +37,7 @@ import {
   type ScenarioForm,
 } from '../inputs/evaluation-form';
 import { formSignal } from '../inputs/form-signal';
+import { labeledMessage } from '../inputs/missing-words';
 import { ScenarioFields } from '../inputs/scenario-fields';
 import { SituationList } from '../inputs/situation-list';
 import { typed } from '../inputs/typed-quantity';
@@ -93,6 +94,7 @@ export class EvaluationEditor {
 
   readonly steps = viewChild(StepsPanel);
 
+  protected readonly labeled = labeledMessage;
   protected readonly ruleSets: readonly RuleSet[] = RULE_SETS;
   protected readonly form = computed(() => evaluationForm(this.fb, this.evaluation()));
   protected readonly saver = computed(() =>

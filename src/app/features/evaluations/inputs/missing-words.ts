@@ -27,7 +27,56 @@ const MISSING: Readonly<Record<string, string>> = {
 export function inOurWords(errors: readonly FieldError[]): FieldError[] {
   return errors.map((error) => {
     if (!/^(Invalid input|Too (small|big))/.test(error.message)) return error;
-    const last = /([A-Za-z]+)(?:\[\d+\])*$/.exec(error.path)?.[1] ?? '';
-    return { ...error, message: MISSING[last] ?? 'Enter a value that this field allows.' };
+    return {
+      ...error,
+      message: MISSING[lastName(error.path)] ?? 'Enter a value that this field allows.',
+    };
   });
+}
+
+/** The label of a field on the bench, by the last name of its path. */
+const LABELS: Readonly<Record<string, string>> = {
+  eyeS: 'Exposure, eye',
+  skinS: 'Exposure, skin',
+  exposureReason: 'Why this duration',
+  name: 'Name of the situation',
+  emissionIds: 'Lines on together',
+  focalLengthMm: 'Focal length',
+  diameterAtLensMm: 'Beam at the lens',
+  numericalAperture: 'Numerical aperture',
+  modeFieldDiameterUm: 'Mode-field diameter',
+  reflectance: 'Reflectance',
+  angleDeg: 'Viewing angle',
+  spotMm: 'Lit spot',
+  objectiveMm: 'Objective',
+  magnification: 'Magnification',
+  transmission: 'Transmission',
+  attenuationPerKm: 'Attenuation of the air',
+  atDistanceM: 'Also at this distance',
+  wavelengthNm: 'Wavelength',
+  powerW: 'Power',
+  pulseEnergyJ: 'Pulse energy',
+  pulseDurationS: 'Pulse duration',
+  repetitionRateHz: 'Repetition rate',
+  pulsesPerBurst: 'Pulses in a burst',
+  intraBurstRateHz: 'Rate in a burst',
+  burstRateHz: 'Rate of bursts',
+  diameterMm: 'Diameter, exit',
+  diameterYMm: 'Diameter, y',
+  divergenceMrad: 'Divergence, full',
+  divergenceYMrad: 'Divergence, y',
+  sourceMrad: 'Apparent source',
+  sourceYMrad: 'Source, y',
+  waistDistanceM: 'Waist from the exit',
+  m2: 'M²',
+};
+
+/** The sentence of an error with the label of its field in front, for a list away from the field. */
+export function labeledMessage({ path, message }: FieldError): string {
+  const label = LABELS[lastName(path)];
+  return label ? `${label}: ${message}` : message;
+}
+
+function lastName(path: string): string {
+  return /([A-Za-z0-9]+)(?:\[\d+\])*$/.exec(path)?.[1] ?? '';
 }

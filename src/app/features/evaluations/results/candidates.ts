@@ -2,6 +2,7 @@ import { ChangeDetectionStrategy, Component, computed, input } from '@angular/co
 import type { BeamResult, LimitCandidate, Side } from '@shared/hazard/result';
 import { formatFull, formatWavelength } from '@shared/model/quantity-format';
 import type { LineView, ResultView } from '@shared/model/result-view';
+import { stepValue } from '@shared/model/step-text';
 import { durationWords, MECHANISM_WORDS, RULE_WORDS } from '@shared/text/hazard-words';
 
 import { Formula } from '../../../ui/formula/formula';
@@ -38,7 +39,7 @@ export class Candidates {
   protected readonly photons = computed(() =>
     this.view().lines.map(({ eye }) => ({
       wavelength: formatWavelength(eye.wavelengthNm).text,
-      energy: `${formatFull(eye.photonEnergyJ, 'J')} (${eye.photonEnergyEv.toPrecision(6)}\u202feV)`,
+      energy: `${stepValue({ value: eye.photonEnergyJ })}\u202fJ (${eye.photonEnergyEv.toPrecision(6)}\u202feV)`,
       frequency: formatFull(eye.frequencyHz, 'Hz'),
     })),
   );

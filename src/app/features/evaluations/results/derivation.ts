@@ -16,10 +16,17 @@ interface ShownStep {
   readonly unit: string;
 }
 
+interface NumberedStep {
+  readonly step: Step;
+  readonly number: number;
+}
+
 interface Group {
   readonly title: string;
-  readonly steps: readonly ShownStep[];
+  readonly count: number;
   readonly isOpen: boolean;
+  /** Typeset only while the group is open: there may be hundreds. */
+  readonly steps: readonly ShownStep[];
 }
 
 /** How a result was found, step by step: each can be recomputed by hand. */
@@ -35,22 +42,30 @@ export class Derivation {
 
   /** Numbers as the engine holds them, or to ten digits. */
   protected readonly allDigits = signal(false);
+  /** Groups that the person opened or closed, by title; the others are as proposed. */
+  private readonly chosen = signal<ReadonlyMap<string, boolean>>(new Map());
   protected readonly groups = computed(() => this.groupsOf(this.view()));
+
+  protected toggle(title: string, isOpen: boolean): void {
+    this.chosen.update((chosen) => new Map(chosen).set(title, isOpen));
+  }
 
   private groupsOf(view: ResultView): Group[] {
     const governing = view.lines.indexOf(governingLine(view, 'eye'));
-    const groups = new Map<string, { steps: ShownStep[]; first: Step }>();
+    const groups = new Map<string, NumberedStep[]>();
     (view.result.steps ?? []).forEach((step, index) => {
       const key = `${step.side} ${step.beam ?? 'all'}`;
-      const group = groups.get(key) ?? { steps: [], first: step };
-      group.steps.push(this.shown(step, index + 1));
-      groups.set(key, group);
+      groups.set(key, [...(groups.get(key) ?? []), { step, number: index + 1 }]);
     });
-    return [...groups.values()].map(({ steps, first }) => ({
-      title: titleOf(view, first),
-      steps,
-      isOpen: first.side === 'eye' && (first.beam === undefined || first.beam === governing),
-    }));
+    return [...groups.values()].map((steps) => {
+      const first = (steps[0] as NumberedStep).step;
+      const title = titleOf(view, first);
+      const isProposed =
+        first.side === 'eye' && (first.beam === undefined || first.beam === governing);
+      const isOpen = this.chosen().get(title) ?? isProposed;
+      const shown = isOpen ? steps.map(({ step, number }) => this.shown(step, number)) : [];
+      return { title, count: steps.length, isOpen, steps: shown };
+    });
   }
 
   private shown(step: Step, number: number): ShownStep {

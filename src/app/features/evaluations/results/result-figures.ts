@@ -10,6 +10,7 @@ import { fieldId } from '../../../ui/field/field-id';
 import { Quantity } from '../../../ui/quantity/quantity';
 import { ReachLegend } from '../../../ui/reach-strip/reach-legend';
 import { ReachStrip } from '../../../ui/reach-strip/reach-strip';
+import { labeledMessage } from '../inputs/missing-words';
 import { HeroFigures } from './hero-figures';
 import { LineTable } from './line-table';
 import type { Outcome } from './outcome';
@@ -53,6 +54,8 @@ export class ResultFigures {
     const { view } = this.outcome();
     return view?.case.at && atRows(view, view.case.at.distanceM);
   });
+
+  protected readonly labeled = labeledMessage;
 
   protected linkOf(error: FieldError): string {
     return fieldId(error.path);

@@ -1,4 +1,4 @@
-import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
+import { ChangeDetectionStrategy, Component, computed, input, signal } from '@angular/core';
 import { formatQuantity } from '@shared/model/quantity-format';
 import { placeCautions } from '@shared/text/place-cautions';
 
@@ -24,6 +24,7 @@ export class ResultGrounds {
   readonly ownAssumptions = input<readonly string[]>([]);
   readonly offersFreeBench = input(true);
 
+  protected readonly showsCandidates = signal(false);
   protected readonly heading = computed(() => {
     const distanceM = this.outcome().view?.result.eye.hazardDistanceM ?? 0;
     return distanceM > 0

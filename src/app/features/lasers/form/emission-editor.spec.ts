@@ -65,7 +65,7 @@ describe('the fields of a line', () => {
     });
     // Gaussian: 1/e² width = 1.699 FWHM; a half angle is half the full one.
     expect(notes()).toEqual([
-      expect.stringMatching(/1 mm at FWHM is 1\.699 mm at 1\/e²/),
+      expect.stringMatching(/1 mm at half maximum \(FWHM\) is 1\.699 mm at 1\/e²/),
       expect.stringMatching(/half angle 0\.5 mrad is the full angle 1 mrad/),
     ]);
   });

@@ -35,6 +35,18 @@ const STORED: Laser = {
   mayEvaluate: true,
 };
 
+const SETTINGS = {
+  siteName: 'Halvermere Institute',
+  zone: 'Europe/Berlin',
+  ruleSet: 'eu-2006-25',
+  classScheme: 'iec-60825-1-2014',
+  authorMayApprove: false,
+  evaluationReviewMonths: 24,
+  emergencyPhone: '555-0110',
+  version: 1,
+  updatedAt: AT,
+};
+
 function problem(name: ProblemName, more: object = {}) {
   const { status, title } = PROBLEMS[name];
   return [
@@ -75,7 +87,16 @@ describe('the form of a laser', () => {
     page = fixture.nativeElement;
     fixture.detectChanges();
     if (stored) http.expectOne(`/api/lasers/${stored.id}`).flush(stored);
-    await fixture.whenStable();
+    http.expectOne('/api/settings').flush(SETTINGS);
+    await settle();
+  }
+
+  /** Not `whenStable`: it would wait for the answers that the test has yet to give. */
+  async function settle() {
+    for (let turn = 0; turn < 3; turn += 1) {
+      await Promise.resolve();
+      fixture.detectChanges();
+    }
   }
 
   async function type(label: string, text: string) {
@@ -84,13 +105,13 @@ describe('the form of a laser', () => {
     )?.control as HTMLInputElement;
     field.value = text;
     field.dispatchEvent(new Event('input'));
-    await fixture.whenStable();
+    await settle();
   }
 
   async function press(words: string) {
     const buttons = [...page.querySelectorAll('button')];
     buttons.find((one) => one.textContent?.trim() === words)!.click();
-    await fixture.whenStable();
+    await settle();
   }
 
   const text = (selector: string) => page.querySelector(selector)?.textContent ?? '';
@@ -132,7 +153,7 @@ describe('the form of a laser', () => {
     });
     const navigate = vi.spyOn(TestBed.inject(Router), 'navigate');
     request.flush(STORED);
-    await fixture.whenStable();
+    await settle();
     expect(navigate).toHaveBeenCalledWith(['/lasers', 'l1']);
     expect(fixture.componentInstance.hasUnsavedChanges()).toBe(false);
   });
@@ -143,7 +164,7 @@ describe('the form of a laser', () => {
     await press('Save the changes');
     const errors = [{ path: 'serial', message: 'Another laser has this serial.' }];
     http.expectOne({ method: 'PUT' }).flush(...problem('invalid-input', { errors }));
-    await fixture.whenStable();
+    await settle();
     expect(text('#field-serial-note')).toContain('Another laser has this serial.');
     expect(page.querySelector<HTMLInputElement>('#field-serial')?.value).toBe('XXX');
   });
@@ -156,7 +177,7 @@ describe('the form of a laser', () => {
     expect(first.request.headers.get('If-Match')).toBe('"3"');
     first.flush(...problem('stale-version', { currentVersion: 4 }));
     http.expectOne('/api/lasers/l1').flush({ ...STORED, version: 4, model: 'QG-5 theirs' });
-    await fixture.whenStable();
+    await settle();
     expect(text('lm-version-conflict')).toContain('QG-5 theirs');
     expect(text('lm-version-conflict')).toContain('QG-5 mine');
     await press('Save mine over it');

@@ -268,8 +268,9 @@ function partsOfLargestSum(
     const situation = situationOf(scene, hazard.side, sceneBeam, source);
     const candidates = limitCandidates(situation);
     const best = new Map<Tissue, Part>();
+    const ratioOf = ratioAt(scene, sceneBeam, distanceM, aided);
     for (const candidate of candidates) {
-      const ratio = ratioOf(scene, sceneBeam, candidate, distanceM, aided);
+      const ratio = ratioOf(candidate);
       const { tissue } = candidate.row;
       if (ratio > (best.get(tissue)?.ratio ?? -1)) {
         best.set(tissue, { beam, situation, candidates, candidate, ratio });
@@ -282,17 +283,19 @@ function partsOfLargestSum(
   return [...byTissue.values()].reduce((a, b) => (sum(b) > sum(a) ? b : a), []);
 }
 
-function ratioOf(
+/** Exposure of the beam's model over what a candidate allows, in air. */
+function ratioAt(
   { model, attenuationPerM }: Scene,
   sceneBeam: SceneBeam,
-  candidate: LimitCandidate,
   distanceM: number,
   { gain, collectingApertureM }: AidedBeam,
-): number {
-  const gathered = collectingApertureM(candidate.apertureM);
-  const exposure = modelExposure(sceneBeam, model.onAxis, gathered, distanceM);
+): (candidate: LimitCandidate) => number {
   const transmission = Math.exp(-attenuationPerM * distanceM);
-  return (exposure * gain(candidate.apertureM) * transmission) / comparableLimit(candidate);
+  return (candidate) => {
+    const gathered = collectingApertureM(candidate.apertureM);
+    const exposure = modelExposure(sceneBeam, model.onAxis, gathered, distanceM);
+    return (exposure * gain(candidate.apertureM) * transmission) / comparableLimit(candidate);
+  };
 }
 
 function writePart(

@@ -1,4 +1,3 @@
-import type { BeamShape } from '../geometry/beam-shape';
 import type { DiffuseField } from '../geometry/diffuse-field';
 import type { Path } from '../case';
 import type { SceneBeam } from '../scene';
@@ -112,7 +111,8 @@ export function writeMeanExposure(
   const { field, timing } = sceneBeam;
   const emitted = timing.isPulsed ? 'Q' : 'Phi';
   if (field.kind === 'surface') return `${emitted}*${diffuseFormula(field, distance)}`;
-  writeFractionAt(writer, field, distanceM, distance, apertureM);
+  writeWidths(writer, field, distanceM, distance);
+  writeFraction(writer, field, distanceM, { symbol: 'D_f', apertureM });
   return `${emitted}*eta/(pi*D_f^2/4)`;
 }
 
@@ -120,15 +120,4 @@ export function writeMeanExposure(
 export function diffuseFormula({ spotM }: DiffuseField, distance: string): string {
   const area = spotM > 0 ? `(${distance}^2+s^2/4)` : `${distance}^2`;
   return `rho*cos(theta*pi/180)/(pi*${area})`;
-}
-
-function writeFractionAt(
-  writer: StepWriter,
-  shape: BeamShape,
-  distanceM: number,
-  distance: string,
-  apertureM: number,
-): void {
-  writeWidths(writer, shape, distanceM, distance);
-  writeFraction(writer, shape, distanceM, { symbol: 'D_f', apertureM });
 }

@@ -17,7 +17,6 @@ export function writeFactors(
   candidate: LimitCandidate,
 ): void {
   const { row } = candidate;
-  const { symbols } = ruleSet.factors;
   for (const factor of row.factors) writeWavelengthFactor(writer, ruleSet, situation, factor);
   if (row.growsWithSource) writeCE(writer, ruleSet, situation, candidate);
   if (row.hasT2 || row.printed.durationS.includes('T2')) writeT2(writer, ruleSet, situation);

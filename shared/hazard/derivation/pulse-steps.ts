@@ -37,7 +37,7 @@ export function writePulses(
   }
   if (candidate.train !== undefined) {
     if (candidate.sharedBySymbol === 'n_g') writeGroup(writer, situation, emission, candidate);
-    writeTrain(writer, ruleSet, situation, emission, candidate);
+    writeTrain(writer, ruleSet, situation, candidate);
   }
 }
 
@@ -102,10 +102,10 @@ function writeTrain(
   writer: StepWriter,
   ruleSet: RuleSet,
   situation: LimitSituation,
-  emission: PulsedEmission,
   { train, sharedBySymbol }: LimitCandidate,
 ): void {
-  if (train === undefined) return;
+  const { emission } = situation;
+  if (train === undefined || emission.mode === 'cw' || emission.mode === 'single') return;
   const { symbols } = ruleSet.factors;
   const isByT2 = countingTime(situation) < situation.exposureS;
   if (isByT2) writeT2(writer, ruleSet, situation);

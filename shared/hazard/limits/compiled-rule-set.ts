@@ -121,33 +121,38 @@ export function bandAt(table: CompiledTable, wavelengthNm: number): WavelengthBa
   return bands[low] as WavelengthBand;
 }
 
+/** The band of a table that is being compiled. */
+interface BandPlace {
+  readonly ruleSet: RuleSet;
+  readonly side: Side;
+  /** A wavelength of the band, which stands for all of them. */
+  readonly fromNm: number;
+}
+
 function compileTable(ruleSet: RuleSet, side: Side): CompiledTable {
   const edgesNm = wavelengthEdges(ruleSet, side);
-  const bands = edgesNm.map((fromNm) => compileBand(ruleSet, side, fromNm));
+  const bands = edgesNm.map((fromNm) => compileBand({ ruleSet, side, fromNm }));
   return { edgesNm: Float64Array.from(edgesNm), bands };
 }
 
-function compileBand(ruleSet: RuleSet, side: Side, fromNm: number): WavelengthBand {
+function compileBand(place: BandPlace): WavelengthBand {
+  const { ruleSet, side, fromNm } = place;
   const { factors, eyeSmallSource, eyeExtendedSource, skin } = ruleSet;
   const compile = (table: readonly EyeRow[]) =>
-    rowsInside(table, fromNm).flatMap((row) => compileRows(ruleSet, side, row, fromNm));
-  const smallSource = compile(side === 'eye' ? eyeSmallSource : skin);
-  const extendedSource = compile(side === 'eye' ? eyeExtendedSource : skin);
-  const band = {
-    smallSource,
-    extendedSource,
+    rowsInside(table, fromNm).flatMap((row) => compileRows(place, row));
+  const hasTrainFactor = side === 'eye' || ruleSet.pulseTrain.coversSkin;
+  const pulseTrain = hasTrainFactor ? rowsInside(factors.CP, fromNm) : [];
+  const ti = factorRowAt(factors.Ti, fromNm);
+  return {
+    smallSource: compile(side === 'eye' ? eyeSmallSource : skin),
+    extendedSource: compile(side === 'eye' ? eyeExtendedSource : skin),
     isRetinal: side === 'eye' && fromNm >= 400 && fromNm < 1400,
     alphaMax: rowsInside(factors.alphaMax, fromNm),
     gammaPh: rowsInside(factors.gammaPh, fromNm),
     t1: factorRowAt(factors.T1, fromNm),
-    ti: factorRowAt(factors.Ti, fromNm),
-    pulseTrain:
-      side === 'eye' || ruleSet.pulseTrain.coversSkin ? rowsInside(factors.CP, fromNm) : [],
-  };
-  return {
-    ...band,
-    hasUncertainTrain:
-      band.pulseTrain.some(isUncertain) || (band.ti ? isUncertain(band.ti) : false),
+    ti,
+    pulseTrain,
+    hasUncertainTrain: [...pulseTrain, ...(ti ? [ti] : [])].some(isUncertain),
   };
 }
 
@@ -183,20 +188,18 @@ function wavelengthEdges(ruleSet: RuleSet, side: Side): number[] {
 }
 
 /** A row as it is printed; a reference to the skin stands for each row of the skin in its durations. */
-function compileRows(ruleSet: RuleSet, side: Side, row: EyeRow, fromNm: number): CompiledRow[] {
-  if (!('sameAs' in row)) return [compileRow(ruleSet, side, row, fromNm)];
-  return rowsInside(ruleSet.skin, fromNm)
+function compileRows(place: BandPlace, row: EyeRow): CompiledRow[] {
+  if (!('sameAs' in row)) return [compileRow(place, row)];
+  return rowsInside(place.ruleSet.skin, place.fromNm)
     .filter((skinRow) => Number(skinRow.durationS[1]) > Number(row.durationS[0]))
-    .map((skinRow) => compileRow(ruleSet, side, skinRow, fromNm, row));
+    .map((skinRow) => compileRow(place, skinRow, row));
 }
 
 const PER_M2: Record<Quantity, number> = { 'J/m2': 1, 'W/m2': 1, 'J/cm2': 1e4, 'W/cm2': 1e4 };
 
 function compileRow(
-  ruleSet: RuleSet,
-  side: Side,
+  { ruleSet, side, fromNm }: BandPlace,
   row: LimitRow,
-  fromNm: number,
   reference?: SkinReferenceRow,
 ): CompiledRow {
   const symbols = row.factors ?? [];

@@ -11,7 +11,7 @@ describe('findRoot', () => {
     ['a steep function', (x: number) => Math.exp(20 * x) - 5, -1, 3, Math.log(5) / 20],
     ['a root at an end', (x: number) => x - 1, 1, 2, 1],
     ['a falling logarithm over many decades', (x: number) => -Math.log(x / 1e5), 1e-3, 1e9, 1e5],
-  ])('finds %s', (_, f, from, to, expected) => {
+  ])('finds %s', (...[, f, from, to, expected]) => {
     const root = findRoot(f, from, to);
     expect(Math.abs(root / expected - 1)).toBeLessThan(1e-13);
   });

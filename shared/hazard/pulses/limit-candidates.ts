@@ -52,54 +52,62 @@ export interface LimitSituation {
   readonly hasT2: boolean;
 }
 
-/** The pulses that share one limit. */
-interface PulsesSharing {
-  readonly count: number;
-  readonly symbol: LimitCandidate['sharedBySymbol'];
+/** A rule and the duration at which it reads the limits. */
+interface RuleReading {
+  readonly rule: LimitRule;
+  readonly durationS: number;
+  readonly sharedBy: number;
+  readonly sharedBySymbol: LimitCandidate['sharedBySymbol'];
 }
-
-const ONE: PulsesSharing = { count: 1, symbol: '' };
 
 /** Every limit that the emission has to keep; the order decides between equals. */
 export function limitCandidates(situation: LimitSituation): LimitCandidate[] {
-  const { emission, exposureS } = situation;
+  const { point, emission, exposureS } = situation;
   const candidates: LimitCandidate[] = [];
   if (emission.mode === 'cw') {
-    addRows(candidates, situation, 'continuous', exposureS, ONE);
+    addRows(candidates, point, alone('continuous', exposureS));
     return candidates;
   }
-  addRows(candidates, situation, 'single-pulse', emission.pulseDurationS, ONE);
+  addRows(candidates, point, alone('single-pulse', emission.pulseDurationS));
   if (emission.mode === 'single') return candidates;
-  const pulses = { count: pulsesWithin(emission, exposureS), symbol: 'N' } as const;
-  addRows(candidates, situation, 'average', exposureS, pulses);
+  addRows(candidates, point, {
+    rule: 'average',
+    durationS: exposureS,
+    sharedBy: pulsesWithin(emission, exposureS),
+    sharedBySymbol: 'N',
+  });
   if (emission.mode === 'burst') {
-    const ofBurst = { count: emission.pulsesPerBurst, symbol: 'n_b' } as const;
-    addRows(candidates, situation, 'average', burstDuration(emission), ofBurst);
+    addRows(candidates, point, {
+      rule: 'average',
+      durationS: burstDuration(emission),
+      sharedBy: emission.pulsesPerBurst,
+      sharedBySymbol: 'n_b',
+    });
   }
   addTrain(candidates, situation, emission);
   return candidates;
 }
 
+function alone(rule: LimitRule, durationS: number): RuleReading {
+  return { rule, durationS, sharedBy: 1, sharedBySymbol: '' };
+}
+
 function addRows(
   candidates: LimitCandidate[],
-  { point }: LimitSituation,
-  rule: LimitRule,
-  durationS: number,
-  pulses: PulsesSharing,
+  point: ReadingPoint,
+  { rule, durationS, sharedBy, sharedBySymbol }: RuleReading,
 ): void {
   const tabulatedS = tabulatedDuration(point, durationS);
   for (const row of rowsFor(point)) {
     if (!appliesAt(row, point, tabulatedS)) continue;
-    const apertureM = limitingApertureM(row, point, durationS);
-    const limit = radiantExposureLimit(row, point, durationS) / pulses.count;
     candidates.push({
       rule,
       row,
       durationS,
-      limit,
-      apertureM,
-      sharedBy: pulses.count,
-      sharedBySymbol: pulses.symbol,
+      limit: radiantExposureLimit(row, point, durationS) / sharedBy,
+      apertureM: limitingApertureM(row, point, durationS),
+      sharedBy,
+      sharedBySymbol,
       train: undefined,
     });
   }

@@ -78,7 +78,7 @@ export function fractionBox(over: MathBox, under: MathBox, size: number): MathBo
       return (
         over.draw(x + (width - over.width) / 2, y - axis - gap - over.descent) +
         under.draw(x + (width - under.width) / 2, y - axis + gap + under.ascent) +
-        line(x, y - axis, x + width, y - axis, 0.05 * size)
+        bar(x, y - axis, width, 0.05 * size)
       );
     },
   };
@@ -140,6 +140,6 @@ function ceilingFence(x: number, top: number, bottom: number, reach: number): st
   return `<path d="M ${px(x)} ${px(top)} L ${px(stem)} ${px(top)} L ${px(stem)} ${px(bottom)}" fill="none" stroke="#1c211d" stroke-width="0.55"/>`;
 }
 
-function line(x1: number, y1: number, x2: number, y2: number, width: number): string {
-  return `<path d="M ${px(x1)} ${px(y1)} L ${px(x2)} ${px(y2)}" fill="none" stroke="#1c211d" stroke-width="${px(width)}"/>`;
+function bar(x: number, y: number, length: number, width: number): string {
+  return `<path d="M ${px(x)} ${px(y)} L ${px(x + length)} ${px(y)}" fill="none" stroke="#1c211d" stroke-width="${px(width)}"/>`;
 }

@@ -41,7 +41,6 @@ function evaluateCase(hazardCase: HazardCase, bare: boolean): EvaluationResult {
   const skin = sideHazard(scene, 'skin');
   const { id } = hazardCase;
   const result: EvaluationResult = {
-    ...(id === undefined ? undefined : { id }),
     ruleSet: hazardCase.ruleSet,
     edition: ruleSet.edition,
     engineVersion: ENGINE_VERSION,
@@ -51,8 +50,9 @@ function evaluateCase(hazardCase: HazardCase, bare: boolean): EvaluationResult {
     warnings: warningsOf(scene, eye, skin),
     cautions: cautionsOf(ruleSet),
   };
-  if (!bare) addSteps(result, () => derive(scene, eye, skin));
-  return result;
+  const named = id === undefined ? result : { id, ...result };
+  if (!bare) addSteps(named, () => derive(scene, eye, skin));
+  return named;
 }
 
 /** Adds the derivation. It is made when it is first read: most results are only looked at. */

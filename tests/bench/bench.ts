@@ -5,9 +5,7 @@ const BENCHES: Readonly<Record<string, () => object>> = {
   engine: engineBench,
 };
 
-const results = Object.fromEntries(
-  Object.entries(BENCHES).map(([name, bench]) => [name, bench()]),
-);
+const results = Object.fromEntries(Object.entries(BENCHES).map(([name, bench]) => [name, bench()]));
 
 if (process.argv.includes('--json')) {
   console.log(JSON.stringify(results));

@@ -122,7 +122,7 @@ it('the whole way from registration to a draft works by keyboard alone', async (
 
 /** Picks a record in a search field: types, takes the first suggestion. */
 async function choose(page: Page, label: string, words: string): Promise<void> {
-  const field = page.getByRole('combobox', { name: label, exact: true });
+  const field = page.getByRole('combobox', { name: new RegExp(`^${label}`) });
   await field.fill(words);
   await page
     .getByRole('option', { name: new RegExp(words) })

@@ -67,5 +67,5 @@ export async function signIn(page: Page, part: Part): Promise<void> {
   await page.getByLabel('E-mail').fill(PEOPLE[part].email);
   await page.getByLabel('Password', { exact: true }).fill(DEMO_PASSWORD);
   await page.getByRole('button', { name: 'Sign in', exact: true }).click();
-  await page.getByRole('navigation', { name: 'Main' }).waitFor();
+  await page.waitForURL((url) => url.pathname !== '/sign-in');
 }

@@ -109,11 +109,13 @@ export class FreeBenchPage {
       });
   }
 
+  /** A further beam, as the last one. */
   protected addBeam(): void {
     const { beams } = this.form().controls;
     const last = beams.controls.at(-1);
-    const copy = last ? beamForm(this.fb, FIRST_CASE.beams[0]!) : undefined;
-    if (!copy || !last) return;
+    const [first] = FIRST_CASE.beams;
+    if (!last || !first) return;
+    const copy = beamForm(this.fb, first);
     copy.setValue(last.getRawValue());
     beams.push(copy);
   }

@@ -17,8 +17,6 @@ export const MM = 72 / 25.4;
 
 export const PAGE_WIDTH = 595.28;
 export const PAGE_MARGIN = 40;
-/** Width of the column of text, pt. */
-export const TEXT_WIDTH = PAGE_WIDTH - 2 * PAGE_MARGIN;
 
 /** Faces and sizes of every document of the product. */
 export const DOCUMENT_STYLE: Pick<TDocumentDefinitions, 'defaultStyle' | 'styles'> = {

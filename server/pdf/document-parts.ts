@@ -15,7 +15,6 @@ const HAIR = '#c6cec3';
 /** Points of a millimeter. */
 export const MM = 72 / 25.4;
 
-export const PAGE_WIDTH = 595.28;
 export const PAGE_MARGIN = 40;
 
 /** Faces and sizes of every document of the product. */

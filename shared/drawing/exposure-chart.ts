@@ -358,7 +358,3 @@ function titleShape(model: ExposureChartModel, metrics: ReachMetrics, scale: Cha
   };
 }
 
-/** A value of the chart, rounded up: what one reads is never less than what is there. */
-export function formatExposure(value: number, unit: string): FormattedQuantity {
-  return formatQuantity(value, unit, 'up');
-}

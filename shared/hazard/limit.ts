@@ -7,10 +7,9 @@ import {
   type CompiledRuleSet,
 } from './limits/compiled-rule-set';
 import {
-  appliesAt,
   limitingApertureM,
   radiantExposureLimit,
-  rowsFor,
+  rowsAt,
   tabulatedDuration,
   type ReadingPoint,
 } from './limits/row-reading';
@@ -50,9 +49,7 @@ export interface LimitReading {
 export function readLimits(query: LimitQuery): LimitReading[] {
   const point = readingPoint(query);
   const tabulatedS = tabulatedDuration(point, query.durationS);
-  return rowsFor(point)
-    .filter((row) => appliesAt(row, point, tabulatedS))
-    .map((row) => toReading(row, point, query.durationS));
+  return rowsAt(point, tabulatedS).map((row) => toReading(row, point, query.durationS));
 }
 
 /**
@@ -66,8 +63,7 @@ export function exposureLimit(query: LimitQuery): LimitReading {
   const tabulatedS = tabulatedDuration(point, query.durationS);
   let governing: CompiledRow | undefined;
   let lowest = Infinity;
-  for (const row of rowsFor(point)) {
-    if (!appliesAt(row, point, tabulatedS)) continue;
+  for (const row of rowsAt(point, tabulatedS)) {
     const limit = radiantExposureLimit(row, point, query.durationS);
     if (limit < lowest) {
       lowest = limit;

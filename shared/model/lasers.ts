@@ -240,7 +240,6 @@ export const waiverSchema = z.strictObject({
   grantedAt: instantSchema,
   ended: z.boolean(),
 });
-export type Waiver = z.infer<typeof waiverSchema>;
 
 export const blockSchema = z.strictObject({
   reason: z.string(),

@@ -30,7 +30,6 @@ export const signedInUserSchema = z.strictObject({
   /** Areas this person supervises, as supervisor or alternate. */
   areaIds: z.array(idSchema),
 });
-export type SignedInUser = z.infer<typeof signedInUserSchema>;
 
 export const demoAccountSchema = z.strictObject({
   email: z.string(),

@@ -86,13 +86,6 @@ export function emissionWords({ emission }: Beam): string {
   }
 }
 
-/** "2.3 mm", "0.5 × 1 mrad". */
-export function perAxisWords(value: PerAxis | undefined, unit: string): string {
-  if (value === undefined) return 'not given';
-  if (typeof value === 'number') return formatFull(value, unit);
-  return `${value[0]}${UNIT_SPACE}×${UNIT_SPACE}${formatFull(value[1], unit)}`;
-}
-
 /** Durations of a case, said with their side. */
 export function exposureWords({ exposure }: HazardCase): string {
   if (!exposure) return 'one pulse';

@@ -8,7 +8,7 @@ const SEED = 31_415;
 const CASES = drawCases(500, SEED);
 
 // A general mathematics library: it knows nothing of this project. `log` is the natural logarithm.
-const math = create(all);
+const math = create(all!);
 
 describe(`every derivation can be recomputed from what it prints (seed ${SEED})`, () => {
   it('the substituted text of every step evaluates to its value', () => {

@@ -80,11 +80,6 @@ export async function requireArea(ctx: Pick<Context, 'tx'>, id: string): Promise
   return area;
 }
 
-/** The area with this code, for an import. */
-export function areaByCode(ctx: Pick<Context, 'tx'>, code: string) {
-  return findAreaByCode(ctx.tx, code);
-}
-
 /** What decides whether records of the area lie within a scope. */
 export function placementOf(
   area: Pick<AreaInput, 'department' | 'supervisorId' | 'alternateId'>,

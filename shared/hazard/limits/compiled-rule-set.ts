@@ -28,8 +28,6 @@ export interface CompiledRow {
   readonly toS: number;
   /** Whether an edge is a named break time, or the row holds for some sources only. */
   readonly isConditional: boolean;
-  /** The end of the last band belongs to it. */
-  readonly endIncluded: boolean;
   /** Numbers of the SI: J/m² or W/m². */
   readonly coefficient: number;
   readonly plus: number;
@@ -68,10 +66,24 @@ export type Tissue =
   | 'skin, ultraviolet'
   | 'skin';
 
+/** The rows of one wavelength band, cut at every duration where one begins or ends. */
+export interface DurationCells {
+  /** Where each cell begins, s, ascending. */
+  readonly edgesS: readonly number[];
+  readonly cells: readonly DurationCell[];
+}
+
+/** The rows that can apply between two durations. */
+export interface DurationCell {
+  readonly rows: readonly CompiledRow[];
+  /** Whether some of them depend on more than the duration. */
+  readonly isConditional: boolean;
+}
+
 /** Everything that one wavelength band of one side needs. */
 export interface WavelengthBand {
-  readonly smallSource: readonly CompiledRow[];
-  readonly extendedSource: readonly CompiledRow[];
+  readonly smallSource: DurationCells;
+  readonly extendedSource: DurationCells;
   readonly isRetinal: boolean;
   readonly alphaMax: readonly DurationRow[];
   readonly gammaPh: readonly DurationRow[];
@@ -85,7 +97,7 @@ export interface WavelengthBand {
 /** The tables of one side, cut at every wavelength where something changes. */
 export interface CompiledTable {
   /** Lower edges of the bands, nm, ascending. */
-  readonly edgesNm: Float64Array;
+  readonly edgesNm: readonly number[];
   readonly bands: readonly WavelengthBand[];
 }
 
@@ -109,16 +121,25 @@ export function compiledRuleSet(ruleSet: RuleSet): CompiledRuleSet {
 }
 
 /** The band of a wavelength from 180 nm to 1 mm. */
-export function bandAt(table: CompiledTable, wavelengthNm: number): WavelengthBand {
-  const { edgesNm, bands } = table;
+export function bandAt({ edgesNm, bands }: CompiledTable, wavelengthNm: number): WavelengthBand {
+  return bands[lastEdgeUpTo(edgesNm, wavelengthNm)] as WavelengthBand;
+}
+
+/** The cell of a duration inside the range of the tables. */
+export function cellAt({ edgesS, cells }: DurationCells, durationS: number): DurationCell {
+  return cells[lastEdgeUpTo(edgesS, durationS)] as DurationCell;
+}
+
+/** The index of the last edge that is not above a value; the first one when all are. */
+function lastEdgeUpTo(edges: readonly number[], value: number): number {
   let low = 0;
-  let high = edgesNm.length;
+  let high = edges.length;
   while (high - low > 1) {
     const middle = (low + high) >>> 1;
-    if (wavelengthNm >= (edgesNm[middle] as number)) low = middle;
+    if (value >= (edges[middle] as number)) low = middle;
     else high = middle;
   }
-  return bands[low] as WavelengthBand;
+  return low;
 }
 
 /** The band of a table that is being compiled. */
@@ -132,14 +153,14 @@ interface BandPlace {
 function compileTable(ruleSet: RuleSet, side: Side): CompiledTable {
   const edgesNm = wavelengthEdges(ruleSet, side);
   const bands = edgesNm.map((fromNm) => compileBand({ ruleSet, side, fromNm }));
-  return { edgesNm: Float64Array.from(edgesNm), bands };
+  return { edgesNm, bands };
 }
 
 function compileBand(place: BandPlace): WavelengthBand {
   const { ruleSet, side, fromNm } = place;
   const { factors, eyeSmallSource, eyeExtendedSource, skin } = ruleSet;
   const compile = (table: readonly EyeRow[]) =>
-    rowsInside(table, fromNm).flatMap((row) => compileRows(place, row));
+    durationCells(rowsInside(table, fromNm).flatMap((row) => compileRows(place, row)));
   const hasTrainFactor = side === 'eye' || ruleSet.pulseTrain.coversSkin;
   const pulseTrain = hasTrainFactor ? rowsInside(factors.CP, fromNm) : [];
   const ti = factorRowAt(factors.Ti, fromNm);
@@ -154,6 +175,17 @@ function compileBand(place: BandPlace): WavelengthBand {
     pulseTrain,
     hasUncertainTrain: [...pulseTrain, ...(ti ? [ti] : [])].some(isUncertain),
   };
+}
+
+function durationCells(rows: readonly CompiledRow[]): DurationCells {
+  const starts = rows.flatMap(({ fromS, toS }) => [fromS, toS]);
+  const edgesS = [...new Set(starts)].filter((edge) => edge < LONGEST_S).sort((a, b) => a - b);
+  const cells = edgesS.map((edgeS): DurationCell => {
+    // Named edges are not numbers; a row that has one can apply on either side of it.
+    const inCell = rows.filter(({ fromS, toS }) => !(edgeS < fromS) && !(edgeS >= toS));
+    return { rows: inCell, isConditional: inCell.some((row) => row.isConditional) };
+  });
+  return { edgesS, cells };
 }
 
 /** Whether a row was written down with less than high certainty. */
@@ -221,7 +253,6 @@ function compileRow(
     fromS,
     toS,
     isConditional: Number.isNaN(fromS) || Number.isNaN(toS) || row.sourceMrad !== undefined,
-    endIncluded: toS === LONGEST_S,
     coefficient: row.coefficient * constant,
     plus: (row.plus ?? 0) * constant,
     timeExponent: row.timeExponent ?? 0,

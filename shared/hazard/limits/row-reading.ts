@@ -9,7 +9,7 @@ import { correctionFactorCE } from '../factors/correction-factor-ce';
 import { durationRowAt, durationValue, factorValue } from '../factors/factor-value';
 import { power } from '../numeric/power';
 import type { BandEdge, Band } from '../rule-sets/limit-table';
-import { LONGEST_S, type CompiledRow, type WavelengthBand } from './compiled-rule-set';
+import { cellAt, LONGEST_S, type CompiledRow, type WavelengthBand } from './compiled-rule-set';
 
 /** What a limit is read for. */
 export interface ReadingPoint {
@@ -26,18 +26,14 @@ export function tabulatedDuration(point: ReadingPoint, durationS: number): numbe
   return durationS > LONGEST_S ? LONGEST_S : durationS;
 }
 
-/** The rows of the table that fits the source. */
-export function rowsFor(point: ReadingPoint): readonly CompiledRow[] {
-  return point.band.isRetinal && isExtended(point.source)
-    ? point.band.extendedSource
-    : point.band.smallSource;
-}
-
-/** Whether the row holds at a duration of the tables. */
-export function appliesAt(row: CompiledRow, point: ReadingPoint, durationS: number): boolean {
-  if (row.isConditional) return conditionHolds(row, point, durationS);
-  if (durationS < row.fromS) return false;
-  return durationS < row.toS || (durationS === row.toS && row.endIncluded);
+/** The rows that apply at a duration of the tables, of the table that fits the source. */
+export function rowsAt(point: ReadingPoint, tabulatedS: number): readonly CompiledRow[] {
+  const { band, source } = point;
+  const isByExtent = source !== SMALL_SOURCE && isExtended(source);
+  const cell = cellAt(isByExtent ? band.extendedSource : band.smallSource, tabulatedS);
+  return cell.isConditional
+    ? cell.rows.filter((row) => !row.isConditional || conditionHolds(row, point, tabulatedS))
+    : cell.rows;
 }
 
 /**
@@ -96,16 +92,17 @@ export function edgeS(edge: BandEdge, point: ReadingPoint): number {
   return point.band.t1 === undefined ? Infinity : factorValue(point.band.t1, point.wavelengthNm);
 }
 
-/** The same where an edge is a named break time, which belongs to the row that ends there. */
-function conditionHolds(row: CompiledRow, point: ReadingPoint, durationS: number): boolean {
-  const [from, to] = row.printed.durationS;
-  const hasBegun = typeof from === 'number' ? durationS >= from : durationS > edgeS(from, point);
-  const hasNotEnded =
-    typeof to === 'number'
-      ? durationS < to || (row.endIncluded && durationS === to)
-      : durationS <= edgeS(to, point);
-  const { sourceMrad } = row.printed;
-  return hasBegun && hasNotEnded && (sourceMrad === undefined || fitsSource(sourceMrad, point));
+/** Whether a row with a named break time, or for some sources only, holds at a duration. */
+function conditionHolds(
+  { printed: { durationS, sourceMrad } }: CompiledRow,
+  point: ReadingPoint,
+  tabulatedS: number,
+): boolean {
+  const [from, to] = durationS;
+  // A break time belongs to the row that ends there.
+  if (typeof from === 'string' && tabulatedS <= edgeS(from, point)) return false;
+  if (typeof to === 'string' && tabulatedS > edgeS(to, point)) return false;
+  return sourceMrad === undefined || fitsSource(sourceMrad, point);
 }
 
 function fitsSource([above, below]: Band, { source }: ReadingPoint): boolean {

@@ -6,10 +6,9 @@ import { pulseTrainFactor, pulseTrainRow } from '../factors/pulse-train-factor';
 import type { CompiledRow } from '../limits/compiled-rule-set';
 import {
   alphaMax,
-  appliesAt,
   limitingApertureM,
   radiantExposureLimit,
-  rowsFor,
+  rowsAt,
   tabulatedDuration,
   type ReadingPoint,
 } from '../limits/row-reading';
@@ -98,8 +97,7 @@ function addRows(
   { rule, durationS, sharedBy, sharedBySymbol }: RuleReading,
 ): void {
   const tabulatedS = tabulatedDuration(point, durationS);
-  for (const row of rowsFor(point)) {
-    if (!appliesAt(row, point, tabulatedS)) continue;
+  for (const row of rowsAt(point, tabulatedS)) {
     candidates.push({
       rule,
       row,
@@ -130,8 +128,8 @@ function addTrain(
   const pulses = Math.max(1, pulsesWithin(emission, countingTime(situation)) / group.pulses);
   const train = trainReading(situation, group.durationS, group.durationS <= tiS, pulses);
   const tabulatedS = tabulatedDuration(point, group.durationS);
-  for (const row of rowsFor(point)) {
-    if (row.mechanism === 'photochemical' || !appliesAt(row, point, tabulatedS)) continue;
+  for (const row of rowsAt(point, tabulatedS)) {
+    if (row.mechanism === 'photochemical') continue;
     const rowLimit = radiantExposureLimit(row, point, group.durationS);
     const factor = row.isAnteriorCap ? 1 : train.factor;
     candidates.push({

@@ -109,7 +109,9 @@ describe.each(RULE_SETS as readonly RuleSet[])('the tables of $edition', (ruleSe
   it('have an aperture for every limit', () => {
     for (const side of ['eye', 'skin'] as const) {
       for (const band of compiledRuleSet(ruleSet)[side].bands) {
-        for (const row of [...band.smallSource, ...band.extendedSource]) {
+        for (const row of [...band.smallSource.cells, ...band.extendedSource.cells].flatMap(
+          (cell) => cell.rows,
+        )) {
           expect(row.apertures.length).toBeGreaterThan(0);
           expect(row.apertures.at(-1)?.durationS[1]).toBe(LONGEST_S);
         }

@@ -5,8 +5,6 @@ import { zodValidator } from '../../ui/field/zod-validator';
 
 const { shape } = settingsInputSchema;
 
-export type SettingsForm = ReturnType<typeof settingsForm>;
-
 /** The site's policy as fields. */
 export function settingsForm(fb: NonNullableFormBuilder, settings: Settings) {
   return fb.group({

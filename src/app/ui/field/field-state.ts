@@ -44,12 +44,3 @@ export class ShownErrors {
   }
 }
 
-/** The same for a control that stays with its field. */
-export function shownErrors(
-  control: AbstractControl,
-  destroyRef: DestroyRef,
-): Signal<ValidationErrors | null> {
-  const shown = new ShownErrors(destroyRef);
-  shown.follow(control);
-  return shown.errors;
-}

@@ -91,9 +91,6 @@ export function emissionSetForm(fb: Fb, value: EmissionSetValue): EmissionSetFor
   });
 }
 
-export type EmissionList = FormArray<EmissionForm>;
-export type EmissionSetList = FormArray<EmissionSetForm>;
-
 function hasWavelength({ value }: AbstractControl<TypedQuantity | null>) {
   return value === null ? { missing: 'Enter the wavelength, for example 532 nm.' } : null;
 }

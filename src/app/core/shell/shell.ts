@@ -22,6 +22,7 @@ import { SessionExpired } from '../session/session-expired';
 import { LaserSearch } from './laser-search';
 import { DESTINATIONS, HELP } from './navigation';
 import { UserBlock } from './user-block';
+import { WaitingCount } from './waiting-count';
 import { WordMark } from './word-mark';
 
 /** The frame of every page behind the sign-in: spine, search, content. */
@@ -50,6 +51,7 @@ export class Shell {
   protected readonly unhandled = inject(UnhandledProblem);
   protected readonly renewal = inject(SessionRenewal);
   protected readonly clock = inject(SessionClock);
+  protected readonly waiting = inject(WaitingCount);
 
   private readonly search = viewChild.required(LaserSearch);
   private readonly main = viewChild.required<ElementRef<HTMLElement>>('main');

@@ -110,6 +110,10 @@ it('the whole way from registration to a draft works by keyboard alone', async (
   await typeInto(page, 'Power, maximum', '50 mW');
   await typeInto(page, 'Diameter', '1 mm');
   await typeInto(page, 'Divergence', '1 mrad');
+  await typeInto(page, 'Area', 'B-203');
+  await page.getByRole('option', { name: /B-203/ }).waitFor();
+  await page.keyboard.press('ArrowDown');
+  await page.keyboard.press('Enter');
   await tabTo(page, 'Save the laser');
   await page.keyboard.press('Enter');
   await page.waitForURL(/\/lasers\/(?!new)[\w-]+$/);

@@ -48,15 +48,18 @@ function warnOfEdition(warnings: Warning[], { rules: { ruleSet } }: Scene): void
 function warnOfDuration(
   warnings: Warning[],
   { rules }: Scene,
-  { situation, governing }: BeamHazard,
+  { situation, sceneBeam, governing }: BeamHazard,
 ): void {
   const { shortestS } = situation.point;
   const { edition } = rules.ruleSet;
-  if (governing.durationS < shortestS) {
+  // A pulse outside the tables is said even where another rule governs.
+  const { isPulsed, pulseS } = sceneBeam.timing;
+  const durationS = isPulsed ? pulseS : governing.durationS;
+  if (durationS < shortestS) {
     warn(
       warnings,
       'outside-validity',
-      `The tables of ${edition} end at ${shortestS} s. For ${governing.durationS} s the irradiance of the limit at ${shortestS} s is kept.`,
+      `The tables of ${edition} end at ${shortestS} s. For ${durationS} s the irradiance of the limit at ${shortestS} s is kept.`,
     );
   }
   if (governing.durationS > LONGEST_S) {

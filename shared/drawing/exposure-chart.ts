@@ -357,4 +357,3 @@ function titleShape(model: ExposureChartModel, metrics: ReachMetrics, scale: Cha
     halo: 3 * px,
   };
 }
-

@@ -43,4 +43,3 @@ export class ShownErrors {
     this.state.set(control?.touched && control.invalid ? control.errors : null);
   }
 }
-

@@ -1,4 +1,4 @@
-import { formatFull, formatQuantity, type FormattedQuantity } from '../model/quantity-format';
+import { formatFull } from '../model/quantity-format';
 import { isVisible, visibleColor } from './line-swatch';
 import type { ReachSide } from './reach';
 import {

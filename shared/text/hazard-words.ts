@@ -1,4 +1,4 @@
-import type { Beam, HazardCase, OpticalAid, Path, PerAxis } from '../hazard/case';
+import type { Beam, HazardCase, OpticalAid, Path } from '../hazard/case';
 import type { LimitRule, Mechanism } from '../hazard/result';
 import type { Activity } from '../model/evaluations';
 import { formatFull, UNIT_SPACE } from '../model/quantity-format';

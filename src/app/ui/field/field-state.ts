@@ -1,4 +1,4 @@
-import { type DestroyRef, type Signal, signal } from '@angular/core';
+import { type DestroyRef, signal } from '@angular/core';
 import type { AbstractControl, ValidationErrors } from '@angular/forms';
 import type { Subscription } from 'rxjs';
 

@@ -1,6 +1,5 @@
 import {
   type AbstractControl,
-  type FormArray,
   type FormControl,
   type FormGroup,
   type NonNullableFormBuilder,

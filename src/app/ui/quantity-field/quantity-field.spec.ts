@@ -40,6 +40,14 @@ describe('the quantity field', () => {
     expect(note()).toBe('= 0.005 W');
   });
 
+  it('does not ask again what was answered before the number was stored', async () => {
+    const { control, fixture, note } = await open();
+    control.setValue({ value: 10e6, text: '10 MW' });
+    await fixture.whenStable();
+    expect(control.valid).toBe(true);
+    expect(note()).not.toContain('slip of the shift key');
+  });
+
   it('shows the unit that a bare number takes, until one is typed', async () => {
     const { element, type } = await open();
     expect(element.querySelector('.unit')?.textContent).toBe('W');

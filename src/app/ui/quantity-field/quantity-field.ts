@@ -122,6 +122,11 @@ export class QuantityField implements ControlValueAccessor, Validator, AfterCont
       return;
     }
     this.text.set(quantity.text || formatInput(quantity.value, KINDS[this.kind()].unit));
+    const reading = this.reading();
+    if (reading?.ok !== 'ask') return;
+    // Asked and answered before: the stored number says how the text was meant.
+    const meant = reading.options.find((option) => option.reading.value === quantity.value);
+    this.taken.set(meant?.reading ?? null);
   }
 
   registerOnChange(notify: (value: TypedQuantity | null) => void): void {

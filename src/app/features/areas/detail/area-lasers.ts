@@ -8,6 +8,7 @@ import {
 } from '@angular/core';
 import { MatButton } from '@angular/material/button';
 import { RouterLink } from '@angular/router';
+import { formatFull } from '@shared/model/quantity-format';
 
 import { KeysetList, PAGE_ROWS } from '../../../core/paging/keyset-list';
 import { LineSwatch } from '../../../ui/line-swatch/line-swatch';
@@ -51,4 +52,8 @@ export class AreaLasers {
     shown: linkedSignal({ source: this.areaId, computation: () => PAGE_ROWS }),
     load: (query, range) => this.api.list({ ...query, ...range }),
   });
+
+  protected durationOf(eyeS: number): string {
+    return formatFull(eyeS, 's');
+  }
 }

@@ -1,7 +1,7 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
 import { ruleSetById } from '@shared/hazard/rule-sets';
 import type { Laser } from '@shared/model/lasers';
-import { figure } from '@shared/text/figure';
+import { formatFull } from '@shared/model/quantity-format';
 
 import { Quantity } from '../../../ui/quantity/quantity';
 import { ReachLegend } from '../../../ui/reach-strip/reach-legend';
@@ -27,6 +27,6 @@ export class LaserReach {
     const { reach } = this.laser();
     if (!reach) return '';
     const { edition } = ruleSetById(reach.ruleSet);
-    return `${reach.scenario}: eye ${figure(reach.eyeS, 's')}, skin ${figure(reach.skinS, 's')}, by ${edition}`;
+    return `${reach.scenario}: eye ${formatFull(reach.eyeS, 's')}, skin ${formatFull(reach.skinS, 's')}, by ${edition}`;
   });
 }

@@ -1,8 +1,7 @@
 import { ChangeDetectionStrategy, Component, computed, input, output } from '@angular/core';
 import { RouterLink } from '@angular/router';
 import type { LaserListQuery, LaserRow } from '@shared/model/lasers';
-import { formatOpticalDensity, formatQuantity } from '@shared/model/quantity-format';
-import { figure } from '@shared/text/figure';
+import { formatFull, formatOpticalDensity, formatQuantity } from '@shared/model/quantity-format';
 import { LASER_STATE_WORDS } from '@shared/workflow/laser-life-cycle';
 
 import { LineSwatch } from '../../../ui/line-swatch/line-swatch';
@@ -44,7 +43,7 @@ function viewOf(row: LaserRow) {
     // Plain text: a control for each number would make a list long to walk by Tab.
     distance: reach && formatQuantity(reach.eyeDistanceM, 'm', 'up'),
     density: reach ? formatOpticalDensity(reach.opticalDensity) : '–',
-    duration: reach ? `at ${figure(reach.eyeS, 's')}` : '',
+    duration: reach ? `at ${formatFull(reach.eyeS, 's')}` : '',
     summary: summaries.length > 2 ? `${summaries.length} emissions` : summaries.join('; '),
     class: row.verifiedClass ?? row.declaredClass,
     waits: waits[0],

@@ -26,6 +26,7 @@ const elements = [
   },
   { type: 'server-feature', pattern: 'server/features/*', capture: ['feature'] },
   { type: 'server-demo', pattern: 'server/demo' },
+  { type: 'server-cli', pattern: 'server/cli' },
   { type: 'server-root', mode: 'full', pattern: 'server/*.ts' },
   { type: 'server-core', pattern: 'server/*', capture: ['part'] },
   {
@@ -106,6 +107,10 @@ export default tseslint.config(
                 own('server-data'),
                 own('server-feature'),
               ],
+            },
+            {
+              from: 'server-cli',
+              allow: ['server-cli', 'server-root', 'server-core', ...SHARED],
             },
             {
               from: 'server-demo',

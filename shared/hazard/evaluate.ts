@@ -1,10 +1,11 @@
 import type { HazardCase } from './case';
 import { cautionsOf } from './cautions';
 import { derive } from './derivation/derive';
+import { DerivedResult } from './derived-result';
 import { ENGINE_VERSION } from './engine-version';
 import { parseCase } from './parse-case';
 import { sideResult } from './side-result';
-import type { EvaluationErrors, EvaluationResult, Step } from './result';
+import type { EvaluationErrors, EvaluationResult } from './result';
 import { sceneOf } from './scene';
 import { sideHazard } from './side-hazard';
 import { warningsOf } from './warnings';
@@ -51,17 +52,7 @@ function evaluateCase(hazardCase: HazardCase, bare: boolean): EvaluationResult {
     cautions: cautionsOf(ruleSet),
   };
   const named = id === undefined ? result : { id, ...result };
-  if (!bare) addSteps(named, () => derive(scene, eye, skin));
-  return named;
-}
-
-/** Adds the derivation. It is made when it is first read: most results are only looked at. */
-function addSteps(result: EvaluationResult, derivation: () => Step[]): void {
-  let steps: Step[] | undefined;
-  Object.defineProperty(result, 'steps', {
-    enumerable: true,
-    get: () => (steps ??= derivation()),
-  });
+  return bare ? named : new DerivedResult(named, () => derive(scene, eye, skin));
 }
 
 function outOfRange(id: string | undefined): EvaluationErrors {

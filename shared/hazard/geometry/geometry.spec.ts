@@ -1,6 +1,10 @@
 import { describe, expect, it } from 'vitest';
 import type { Beam } from '../case';
-import { apertureFraction } from './aperture-fraction';
+import {
+  apertureFraction,
+  gaussianEllipseFraction,
+  slenderGaussianFraction,
+} from './aperture-fraction';
 import { apertureMean, peak } from './beam-exposure';
 import { beamShape, widthX, widthY } from './beam-shape';
 import { diffuseExposure, diffuseField, spotSource } from './diffuse-field';
@@ -61,10 +65,27 @@ describe('the part of a beam that passes an aperture', () => {
     }
   });
 
-  it('is exact for a slit-like beam', () => {
-    // Far wider than the aperture in x: the density there is 2/(√π Dx), integrated over the disc.
-    const wide = apertureFraction('gaussian', 1, 1e4, 1e-3);
-    expect(wide / (2 / Math.sqrt(Math.PI) / 1e4)).toBeCloseTo(1, 5);
+  it('is the same by both integrals', () => {
+    for (const aperture of [1e-3, 0.1, 1, 7, 100]) {
+      for (const [wide, narrow] of [
+        [1.01, 1],
+        [3, 1],
+        [50, 0.5],
+        [10, 0.01],
+      ] as const) {
+        const even = gaussianEllipseFraction(aperture, wide, narrow);
+        const slender = slenderGaussianFraction(aperture, wide, narrow);
+        expect(Math.abs(slender / even - 1)).toBeLessThan(2e-13);
+      }
+    }
+  });
+
+  it('is exact for a beam like a slit', () => {
+    // Far wider than the aperture in x: the density along it is 2/(√π Dx).
+    for (const narrow of [1e-3, 1e-9, 1e-200]) {
+      const fraction = apertureFraction('gaussian', 1, 1e6, narrow);
+      expect(fraction / (2 / Math.sqrt(Math.PI) / 1e6)).toBeCloseTo(1, 5);
+    }
   });
 });
 

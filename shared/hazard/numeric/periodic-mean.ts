@@ -1,7 +1,7 @@
 /** Two means that differ by less than this are taken for equal: the finer one is far closer. */
 const RELATIVE_TOLERANCE = 1e-13;
 const FEWEST_INTERVALS = 8;
-const MOST_INTERVALS = 1 << 22;
+const MOST_INTERVALS = 1 << 14;
 
 /**
  * The mean over [0, π/2] of a smooth function that is even about both ends, by the trapezoidal rule

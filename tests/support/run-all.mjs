@@ -4,7 +4,7 @@
  */
 import { spawnSync } from 'node:child_process';
 import { existsSync, mkdirSync, readFileSync, rmSync } from 'node:fs';
-import { buildIfOutdated, installIfMissing } from '../../server/cli/start.mjs';
+import { installIfMissing } from '../../server/cli/start.mjs';
 
 const CHROMIUM = '/usr/bin/chromium';
 const DEBIAN_PACKAGES = ['chromium', 'poppler-utils'];
@@ -23,7 +23,6 @@ check('dead code', 'npx', ['knip']);
 suite('units, engine, API', ['vitest', 'run', '--config', 'vitest.config.ts']);
 check('build', 'npm', ['run', '--silent', 'build']);
 suite('components', ['ng', 'test', '--watch=false']);
-buildIfOutdated();
 const journeys = suite('journeys', ['vitest', 'run', '--config', 'vitest.journeys.config.ts']);
 
 console.log(`\nJourneys in a real browser: ${journeys} ran.`);

@@ -2,6 +2,7 @@ import {
   afterNextRender,
   ChangeDetectionStrategy,
   Component,
+  computed,
   type ElementRef,
   inject,
   Injector,
@@ -11,11 +12,13 @@ import {
 import { takeUntilDestroyed } from '@angular/core/rxjs-interop';
 import { MatButton } from '@angular/material/button';
 import { NavigationEnd, Router, RouterLink, RouterLinkActive, RouterOutlet } from '@angular/router';
+import { scopeOf } from '@shared/permissions/permissions';
 import { filter, skip } from 'rxjs';
 
 import { Icon } from '../../ui/icon/icon';
 import { ProblemPanel } from '../../ui/problem-panel/problem-panel';
 import { UnhandledProblem } from '../app-error-handler';
+import { CurrentSession } from '../session/current-session';
 import { SessionClock } from '../session/session-clock';
 import { SessionRenewal } from '../session/session-renewal';
 import { SessionExpired } from '../session/session-expired';
@@ -48,6 +51,7 @@ import { WordMark } from './word-mark';
 export class Shell {
   private readonly router = inject(Router);
   private readonly injector = inject(Injector);
+  private readonly session = inject(CurrentSession);
   protected readonly unhandled = inject(UnhandledProblem);
   protected readonly renewal = inject(SessionRenewal);
   protected readonly clock = inject(SessionClock);
@@ -56,7 +60,11 @@ export class Shell {
   private readonly search = viewChild.required(LaserSearch);
   private readonly main = viewChild.required<ElementRef<HTMLElement>>('main');
 
-  protected readonly destinations = [...DESTINATIONS, HELP];
+  /** Only what the person's roles open; the server decides anyway. */
+  protected readonly destinations = computed(() => {
+    const roles = this.session.user()?.roles ?? [];
+    return [...DESTINATIONS, HELP].filter(({ action }) => scopeOf(action, roles) !== undefined);
+  });
   protected readonly menuOpen = signal(false);
   /** On narrow screens, where the search is not always there. */
   protected readonly searchOpen = signal(false);

@@ -33,7 +33,7 @@ it('a CSV with bad rows is refused row by row, stores nothing, and is taken once
   await upload([header!, good, bad]);
   await page.getByRole('heading', { name: /Errors in 1 row/ }).waitFor();
   const errors = page.getByRole('region', { name: 'Errors' });
-  await errors.getByText('IIIb/4').waitFor();
+  await errors.getByRole('cell', { name: 'IIIb/4', exact: true }).waitFor();
   expect(await errors.getByRole('rowheader', { name: '3' }).count()).toBeGreaterThan(0);
   expect(await page.getByRole('button', { name: /^Save/ }).count()).toBe(0);
   expect(await countOf()).toBe(before);

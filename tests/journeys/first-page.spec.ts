@@ -19,7 +19,7 @@ it('the first page asks who one is, with our own fonts and without a request to 
   expect(page.url()).toContain('/sign-in');
   const title = page.getByRole('heading', { level: 1 });
   expect(await title.evaluate((node) => getComputedStyle(node).fontFamily)).toContain(
-    'Source Serif 4',
+    'Limen Serif',
   );
   expect(
     await page.evaluate(() => [...document.fonts].some((face) => face.status === 'loaded')),

@@ -21,7 +21,7 @@ const ACCOUNTS: readonly (readonly [name: string, role: string, note: string])[]
   [
     'Kofi Asantewell',
     'Deputy laser safety officer',
-    'Evaluates and signs for the laser safety officer.',
+    'Writes and checks evaluations; to sign needs a delegation.',
   ],
   [
     'Leif Arnmarken',
